@@ -29,7 +29,7 @@ export function database(): Sequelize {
 }
 
 /** Closes the process's pool; a later `database()` opens a new one. */
-export async function disconnect(): Promise<void> {
+export async function closeDatabase(): Promise<void> {
   await held.witnessmarkSequelize?.close();
   held.witnessmarkSequelize = undefined;
 }

@@ -1,5 +1,7 @@
+import { pathToFileURL } from 'node:url';
 import type { QueryInterface, Sequelize } from 'sequelize';
 import { SequelizeStorage, Umzug } from 'umzug';
+import { env } from '../env.ts';
 import { connect } from './connection.ts';
 import { migrations } from './migrations/all.ts';
 
@@ -23,8 +25,11 @@ export function migrator(sequelize: Sequelize) {
   });
 }
 
-/** Brings the database at `url` to the newest schema. Returns the names of the migrations it ran. */
-export async function migrate(url: string): Promise<string[]> {
+/**
+ * Brings the database at `url` (by default `DATABASE_URL`) to the newest schema.
+ * Returns the names of the migrations it ran.
+ */
+export async function migrate(url = env().DATABASE_URL): Promise<string[]> {
   const sequelize = connect(url);
   try {
     return (await migrator(sequelize).up()).map(({ name }) => name);
@@ -32,3 +37,6 @@ export async function migrate(url: string): Promise<string[]> {
     await sequelize.close();
   }
 }
+
+// As a command: node --import tsx server/db/migrate.ts
+if (import.meta.url === pathToFileURL(process.argv[1] ?? '').href) await migrate();
