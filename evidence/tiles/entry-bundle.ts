@@ -1,4 +1,3 @@
-import { concat } from '#evidence/bytes/concat.ts';
 import { ProofError } from '#evidence/errors.ts';
 
 /**
@@ -7,12 +6,16 @@ import { ProofError } from '#evidence/errors.ts';
  * @throws ProofError for an entry longer than two bytes can say
  */
 export function writeEntryBundle(entries: readonly Uint8Array[]): Uint8Array {
-  return concat(
-    ...entries.map((entry) => {
-      if (entry.length > 0xffff) throw new ProofError('A log entry is at most 65,535 bytes long.');
-      return concat(Uint8Array.of(entry.length >> 8, entry.length & 0xff), entry);
-    }),
-  );
+  const bundle = new Uint8Array(entries.reduce((length, entry) => length + 2 + entry.length, 0));
+  const view = new DataView(bundle.buffer);
+  let at = 0;
+  for (const entry of entries) {
+    if (entry.length > 0xffff) throw new ProofError('A log entry is at most 65,535 bytes long.');
+    view.setUint16(at, entry.length);
+    bundle.set(entry, at + 2);
+    at += 2 + entry.length;
+  }
+  return bundle;
 }
 
 /**
