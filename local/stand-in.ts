@@ -1,0 +1,43 @@
+import { fileURLToPath } from 'node:url';
+import { sentenceFor } from '../scripts/sentences.mjs';
+
+/** A started stand-in: what the others need to reach it, and how to stop it. */
+export interface StandIn {
+  /** Closes ports and files; resolves when nothing of it is left running. */
+  stop(): Promise<void>;
+}
+
+/** What a stand-in's process tells the process that started it. */
+export type Report = { ready: Record<string, unknown> } | { failed: string };
+
+/**
+ * Makes a module a program of its own: when Node was started with it, starts the stand-in with the options in
+ * the environment variable STAND_IN (JSON), reports over IPC, and stops on SIGTERM or SIGINT.
+ * Options travel in the environment because arguments are readable by every user of the machine.
+ */
+export async function runAsProgram<Options>(
+  moduleUrl: string,
+  start: (options: Options) => Promise<StandIn>,
+): Promise<void> {
+  if (process.argv[1] !== fileURLToPath(moduleUrl)) return;
+  try {
+    const running = await start(JSON.parse(process.env.STAND_IN ?? '{}') as Options);
+    const stop = () => void running.stop().then(() => process.exit(0));
+    process.once('SIGTERM', stop);
+    process.once('SIGINT', stop);
+    report({ ready: plain(running) });
+  } catch (error) {
+    const failed = sentenceFor(error);
+    console.error(failed);
+    report({ failed });
+    process.exitCode = 1;
+    process.disconnect?.();
+  }
+}
+
+const plain = (running: StandIn) =>
+  Object.fromEntries(Object.entries(running).filter(([, value]) => typeof value !== 'function'));
+
+function report(message: Report) {
+  process.send?.(message);
+}
