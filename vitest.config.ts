@@ -1,8 +1,66 @@
 import { defineConfig } from 'vitest/config';
 
+// Tests that want MariaDB and the object store get them from this set-up; the others run without.
+const services = {
+  globalSetup: ['tests/setup/services.ts'],
+  setupFiles: ['tests/setup/environment.ts'],
+};
+
 export default defineConfig({
   test: {
-    include: ['{app,domain,evidence,server,local,seeds,tests}/**/*.test.{ts,tsx}'],
-    environment: 'node',
+    allowOnly: false,
+    passWithNoTests: false,
+    testTimeout: 20_000,
+    hookTimeout: 60_000,
+    projects: [
+      {
+        extends: true,
+        test: {
+          name: 'pure',
+          include: [
+            '{domain,evidence,local,scripts}/**/*.test.ts',
+            'app/*.test.{ts,tsx}',
+            'app/{ui,lib}/**/*.test.{ts,tsx}',
+            'tests/boundaries.test.ts',
+          ],
+        },
+      },
+      {
+        extends: true,
+        test: {
+          name: 'services',
+          include: [
+            '{server,seeds}/**/*.test.ts',
+            'app/routes/**/*.test.{ts,tsx}',
+            'tests/**/*.test.ts',
+          ],
+          exclude: ['tests/boundaries.test.ts', 'tests/{journeys,soak}/**'],
+          ...services,
+        },
+      },
+      {
+        extends: true,
+        test: {
+          name: 'journeys',
+          include: ['tests/journeys/**/*.test.ts'],
+          testTimeout: 120_000,
+          hookTimeout: 120_000,
+          // One browser and one server at a time: two cores do not carry more without waiting.
+          fileParallelism: false,
+          ...services,
+        },
+      },
+      {
+        extends: true,
+        test: {
+          name: 'soak',
+          include: ['tests/soak/**/*.test.ts'],
+          testTimeout: 3_600_000,
+          hookTimeout: 120_000,
+          fileParallelism: false,
+          ...services,
+        },
+      },
+    ],
   },
 });
