@@ -37,9 +37,9 @@ export class NotAllowed extends Problem {
 
 /** The input cannot be used. `fields` says why per field; without fields the sentence stands alone. */
 export class Invalid extends Problem {
-  constructor(fields: Record<string, string>, sentence?: string) {
+  constructor(fields: Record<string, string>, sentence?: string, code = 'invalid') {
     const first = Object.values(fields)[0];
-    super('invalid', sentence ?? first ?? 'This cannot be read. Check the form.', fields);
+    super(code, sentence ?? first ?? 'This cannot be read. Check the form.', fields);
   }
 }
 

@@ -1,0 +1,7 @@
+import { sendMail } from '../mail/send-mail.ts';
+import type { Handler } from './job.ts';
+
+/** What does each kind of job: one line per kind. */
+export const handlers: Record<string, Handler> = {
+  mail: sendMail,
+};
