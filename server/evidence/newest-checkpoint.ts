@@ -1,3 +1,4 @@
+import { fromUtf8 } from '#evidence/bytes/utf8.ts';
 import { select } from '#server/db/sql.ts';
 
 /** A published head of the log. */
@@ -12,12 +13,12 @@ export interface PublishedHead {
 
 /** The newest head that was signed, stored and published; null before the first. */
 export async function newestHead(): Promise<PublishedHead | null> {
-  const [row] = await select<{ size: string; root: Buffer; note: string; made_at: Date }>(
+  const [row] = await select<{ size: string; root: Buffer; note: Buffer; made_at: Date }>(
     `SELECT size, root, note, made_at FROM log_heads
      WHERE published_at IS NOT NULL ORDER BY size DESC LIMIT 1`,
   );
   return row
-    ? { size: Number(row.size), root: row.root, note: row.note, madeAt: row.made_at }
+    ? { size: Number(row.size), root: row.root, note: fromUtf8(row.note), madeAt: row.made_at }
     : null;
 }
 

@@ -36,7 +36,7 @@ async function sign(now: Date): Promise<PublishedHead> {
   await keepLogObject(LAST_NOTE, toUtf8(note), TEXT);
   await run(
     'UPDATE log_heads SET note = ?, published_at = COALESCE(published_at, ?) WHERE size = ? AND root = ?',
-    [note, now, size, root],
+    [Buffer.from(toUtf8(note)), now, size, root],
   );
   return { size, root, note, madeAt: now };
 }

@@ -4,7 +4,7 @@ import type { Viewer } from '#domain/viewer.ts';
 import { run, select, transaction, type Transaction } from '#server/db/sql.ts';
 import { lockCase, staffOnly } from './lock-case.ts';
 import { sealEvent } from './seal-event.ts';
-import { staffPart } from './staff-part.ts';
+import { staffPart } from './person-in-record.ts';
 
 export interface VisibilityChange {
   caseNumber: string;

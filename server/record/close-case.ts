@@ -1,11 +1,11 @@
 import { Conflict } from '#domain/errors.ts';
 import { demand } from '#domain/rights.ts';
-import type { StaffViewer, Viewer } from '#domain/viewer.ts';
+import type { Viewer } from '#domain/viewer.ts';
 import { run, select, transaction, type Transaction } from '#server/db/sql.ts';
 import { chainOf } from './chain-of.ts';
 import { lockCase, staffOnly, type LockedCase } from './lock-case.ts';
 import { sealEvent } from './seal-event.ts';
-import { staffPart } from './staff-part.ts';
+import { staffPart, type Person } from './person-in-record.ts';
 import { tellOwner } from './tell-owner.ts';
 
 async function refuseOpenDrafts(tx: Transaction, caseId: string): Promise<void> {
@@ -28,7 +28,7 @@ async function refuseOpenDrafts(tx: Transaction, caseId: string): Promise<void> 
 export async function sealClose(
   tx: Transaction,
   repair: LockedCase,
-  by: StaffViewer,
+  by: Person,
   now: Date,
 ): Promise<{ commitment: Buffer; recordedAt: Date }> {
   const chain = await chainOf(tx, repair.record);

@@ -6,7 +6,7 @@ import { chainOf } from './chain-of.ts';
 import { sealClose } from './close-case.ts';
 import { lockCase, staffOnly } from './lock-case.ts';
 import { sealEvent } from './seal-event.ts';
-import { staffPart } from './staff-part.ts';
+import { staffPart } from './person-in-record.ts';
 
 /**
  * Records that the instrument went back to its owner. The record demands that nothing stands between

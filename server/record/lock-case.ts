@@ -19,6 +19,15 @@ interface Row {
   handed_back_at: Date | null;
 }
 
+const COLUMNS = 'id, record, closed_at, handed_back_at';
+
+const lockedCase = ({ id, record, closed_at, handed_back_at }: Row): LockedCase => ({
+  id,
+  record,
+  closedAt: closed_at,
+  handedBackAt: handed_back_at,
+});
+
 /**
  * Locks a case's row until the transaction ends, so that acts on one case come one after another.
  * Taken before the head lock, always.
@@ -28,14 +37,23 @@ export async function lockCase(tx: Transaction, caseNumber: string): Promise<Loc
   const number = parseCaseNumber(caseNumber);
   if (!number) throw new NotFound();
   const [row] = await select<Row>(
-    `SELECT id, record, closed_at, handed_back_at FROM cases
-     WHERE year = ? AND ordinal = ? FOR UPDATE`,
+    `SELECT ${COLUMNS} FROM cases WHERE year = ? AND ordinal = ? FOR UPDATE`,
     [number.year, number.ordinal],
     tx,
   );
   if (!row) throw new NotFound();
-  const { id, record, closed_at: closedAt, handed_back_at: handedBackAt } = row;
-  return { id, record, closedAt, handedBackAt };
+  return lockedCase(row);
+}
+
+/** As `lockCase`, by id, for a job that goes on with what was allowed before. */
+export async function lockCaseById(tx: Transaction, caseId: string): Promise<LockedCase> {
+  const [row] = await select<Row>(
+    `SELECT ${COLUMNS} FROM cases WHERE id = ? FOR UPDATE`,
+    [caseId],
+    tx,
+  );
+  if (!row) throw new NotFound();
+  return lockedCase(row);
 }
 
 /** The viewer as one of the shop's people. @throws NotAllowed for anyone else */

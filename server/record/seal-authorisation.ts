@@ -1,7 +1,6 @@
-import type { StaffViewer } from '#domain/viewer.ts';
 import type { Transaction } from '#server/db/sql.ts';
 import { sealEvent } from './seal-event.ts';
-import { staffPart } from './staff-part.ts';
+import { staffPart, type Person } from './person-in-record.ts';
 
 /** What the owner authorised, recorded by one of the shop's people. */
 export interface Authorisation {
@@ -21,7 +20,7 @@ export interface Authorisation {
  */
 export async function sealAuthorisation(
   tx: Transaction,
-  by: StaffViewer,
+  by: Person,
   { caseId, record, text, money, now }: Authorisation,
 ): Promise<{ leafIndex: number; recordedAt: Date }> {
   const { leafIndex, recordedAt } = await sealEvent(tx, {

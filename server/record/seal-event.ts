@@ -1,9 +1,9 @@
-import type { Viewer } from '#domain/viewer.ts';
+import { v7 } from 'uuid';
 import type { CaseKind, PartName } from '#evidence/seal/kinds.ts';
 import { touchCase } from '#server/cases/touch-case.ts';
 import { run, type Transaction } from '#server/db/sql.ts';
 import { appendEntry, type Appended } from '#server/evidence/append-entry.ts';
-import { v7 } from 'uuid';
+import type { Person } from './person-in-record.ts';
 
 /** Something that happened to a case and is sealed at once, without a draft. */
 export interface NewEvent {
@@ -17,7 +17,7 @@ export interface NewEvent {
   /** C of the entries it names. */
   names: Buffer[];
   /** Whoever did it; null when a job did. */
-  by: Extract<Viewer, { kind: 'staff' }> | null;
+  by: Person | null;
   now: Date;
 }
 
