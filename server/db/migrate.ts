@@ -13,7 +13,7 @@ const run = (context: QueryInterface, statements: string[]) =>
 
 /** The migrator on an open pool: `up()`, `down()`, `pending()`. */
 export function migrator(sequelize: Sequelize) {
-  return new Umzug({
+  return new Umzug<QueryInterface>({
     migrations: migrations.map(({ name, up, down }) => ({
       name,
       up: ({ context }) => run(context, up),
