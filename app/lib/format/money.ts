@@ -1,22 +1,20 @@
+import { decimalAmount, minorUnitDigits, type Money } from '#domain/money.ts';
+
 const MINUS = '\u2212';
 
 /**
- * An amount in minor units of an ISO 4217 currency: `money(34600, 'GBP')` is "£346.00",
- * `money(500, 'JPY')` is "¥500". Exact for any size: no float is made on the way.
+ * An amount for people: "£346.00", "−£150.00", "¥500". Exact for any size: the digits go to Intl as
+ * text. For loaders only: the list of currencies is large.
  */
-export function money(minor: bigint | number | string, currency: string): string {
-  const format = new Intl.NumberFormat('en-GB', {
+export function money({ minor, currency }: Money): string {
+  const digits = minorUnitDigits(currency);
+  const text = decimalAmount({ minor: minor < 0n ? -minor : minor, currency });
+  const shown = new Intl.NumberFormat('en-GB', {
     style: 'currency',
     currency,
     currencyDisplay: 'narrowSymbol',
-  });
-  const amount = BigInt(minor);
-  const digits = format.resolvedOptions().maximumFractionDigits ?? 2;
-  const text = (amount < 0n ? -amount : amount).toString().padStart(digits + 1, '0');
-  const whole = text.slice(0, text.length - digits);
-  const shown = format
-    .formatToParts(BigInt(whole))
-    .map((part) => (part.type === 'fraction' ? text.slice(-digits) : part.value))
-    .join('');
-  return amount < 0n ? `${MINUS}${shown}` : shown;
+    minimumFractionDigits: digits,
+    maximumFractionDigits: digits,
+  }).format(text as `${number}`);
+  return minor < 0n ? `${MINUS}${shown}` : shown;
 }

@@ -40,13 +40,16 @@ it('writes spans in the two units that matter, and rounds up', () => {
 });
 
 it('writes money from minor units, exactly', () => {
-  // Minor units: ISO 4217 (GBP 2, JPY 0, KWD 3).
-  expect(money(34600, 'GBP')).toBe('£346.00');
-  expect(money(5n, 'GBP')).toBe('£0.05');
-  expect(money(500, 'JPY')).toBe('¥500');
-  expect(money('1234567890123456789', 'GBP')).toBe('£12,345,678,901,234,567.89');
-  expect(money(-15000, 'GBP')).toBe('\u2212£150.00');
-  expect(money(1005, 'KWD')).toContain('1.005');
+  // Minor units: ISO 4217 (GBP 2, JPY 0, KWD 3, HUF 2).
+  expect(money({ minor: 34600n, currency: 'GBP' })).toBe('£346.00');
+  expect(money({ minor: 5n, currency: 'GBP' })).toBe('£0.05');
+  expect(money({ minor: 500n, currency: 'JPY' })).toBe('¥500');
+  expect(money({ minor: 1234567890123456789n, currency: 'GBP' })).toBe(
+    '£12,345,678,901,234,567.89',
+  );
+  expect(money({ minor: -15000n, currency: 'GBP' })).toBe('\u2212£150.00');
+  expect(money({ minor: 1005n, currency: 'KWD' })).toContain('1.005');
+  expect(money({ minor: 150n, currency: 'HUF' })).toContain('1.50');
 });
 
 it('shortens and groups digests', () => {

@@ -1,17 +1,15 @@
 import { TextField } from '../control/text-field.tsx';
 
 /** The six digits from the mail; a phone offers them by itself. */
-export function CodeField({ error, defaultValue }: { error?: string; defaultValue?: string }) {
+export function CodeField({ name, error }: { name: string; error?: string }) {
   return (
     <TextField
       label="Six-digit code"
-      name="code"
+      name={name}
       inputMode="numeric"
       autoComplete="one-time-code"
-      pattern="[0-9 ]*"
       maxLength={11}
       required
-      defaultValue={defaultValue}
       error={error}
       className="sign-in-code"
     />
