@@ -22,7 +22,7 @@ export interface IdentityOptions {
 
 export interface Identity extends StandIn {
   issuer: string;
-  fault(fault: Fault): Promise<void>;
+  fault: (fault: Fault) => Promise<void>;
 }
 
 /**

@@ -22,7 +22,7 @@ export interface Mail extends StandIn {
   smtpUrl: string;
   /** Where to read them. */
   pageUrl: string;
-  fault(fault: Fault): Promise<void>;
+  fault: (fault: Fault) => Promise<void>;
 }
 
 /**

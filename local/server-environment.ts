@@ -17,7 +17,7 @@ export function serverEnvironment(
   services: Services,
   keys: DemoKeys,
   { port, keysFolder }: { port: number; keysFolder: string },
-): Record<string, string> & { PUBLIC_URL: string } {
+) {
   return {
     DATABASE_URL: services.databaseUrl,
     S3_ENDPOINT: services.storeEndpoint,

@@ -4,7 +4,7 @@ import { sentenceFor } from '../scripts/sentences.mjs';
 /** A started stand-in: what the others need to reach it, and how to stop it. */
 export interface StandIn {
   /** Closes ports and files; resolves when nothing of it is left running. */
-  stop(): Promise<void>;
+  stop: () => Promise<void>;
 }
 
 /** What a stand-in's process tells the process that started it. */

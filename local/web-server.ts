@@ -7,7 +7,7 @@ import { Failure } from '../scripts/sentences.mjs';
 export interface WebServer {
   /** Such as `http://127.0.0.1:3001`. */
   origin: string;
-  close(): Promise<void>;
+  close: () => Promise<void>;
 }
 
 /** Serves `handler` on 127.0.0.1 at `port` (0 chooses a free one). Throws a sentence when the port is taken. */
