@@ -14,6 +14,7 @@ const DRAIN_MS = 8_000;
 
 interface Application {
   createApp(): Express;
+  serverBuild(): Promise<unknown>;
   closeDatabase(): Promise<void>;
 }
 
@@ -38,7 +39,9 @@ function sentence(error: unknown): string {
 
 async function main(): Promise<void> {
   const { HOST, PORT } = env();
-  const { createApp, closeDatabase } = await application();
+  const { createApp, closeDatabase, serverBuild } = await application();
+  // Loaded before the first request, so that a broken build is told at the start.
+  await serverBuild();
   const server = createServer(createApp());
   server.requestTimeout = REQUEST_MS;
   await new Promise<void>((resolve, reject) => {

@@ -9,7 +9,8 @@ export function safeReturn(wanted: string | null): string | null {
   if (wanted === null || !/^\/(?![/\\])[\x21-\x7e]*$/.test(wanted)) return null;
   const url = new URL(wanted, NOWHERE);
   if (url.origin !== NOWHERE || NOT_BACK_TO.test(url.pathname)) return null;
-  return url.pathname + url.search;
+  // Resolving the dots may have left two slashes in front.
+  return url.pathname.startsWith('//') ? null : url.pathname + url.search;
 }
 
 /** The sign-in page that leads back to `path` afterwards. */

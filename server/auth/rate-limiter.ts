@@ -1,5 +1,6 @@
 import { createHash } from 'node:crypto';
-import { RateLimiterRes, RateLimiterStoreAbstract } from 'rate-limiter-flexible';
+import { RateLimiterRes } from 'rate-limiter-flexible';
+import RateLimiterStoreAbstract from 'rate-limiter-flexible/lib/RateLimiterStoreAbstract.js';
 import { run, select } from '../db/sql.ts';
 
 interface Count {
