@@ -1,0 +1,80 @@
+import type { Field } from './field.ts';
+
+/**
+ * Readings of air and wood. Temperature reaches from the first row of the moisture table (30 °F)
+ * to 50 °C; humidity over the columns of that table. Errors: common practice.
+ */
+export const CLIMATE_FIELDS = {
+  temperature: {
+    label: 'Temperature',
+    unit: '°C',
+    min: -10 / 9,
+    max: 50,
+    usual: [5, 40],
+    tool: 'thermometer',
+    error: 0.5,
+    again: 'Outside the table. Read the thermometer again: °C or °F?',
+    slips: ['other temperature', 'lost point'],
+  },
+  humidity: {
+    label: 'Relative humidity',
+    unit: '%',
+    min: 5,
+    max: 95,
+    usual: [20, 80],
+    tool: 'hygrometer',
+    error: 3,
+    again: 'Outside the table. Read the hygrometer again after ten minutes in the room.',
+    slips: ['fraction', 'lost point', 'extra digit'],
+  },
+  airHumidity: {
+    label: 'Relative humidity',
+    unit: '%',
+    min: 1,
+    max: 100,
+    usual: [20, 80],
+    tool: 'hygrometer',
+    error: 3,
+    again: 'Air holds from 1 to 100 %. Read the hygrometer again after ten minutes in the room.',
+    slips: ['fraction', 'lost point', 'extra digit'],
+  },
+  woodWidth: {
+    label: 'Width across the grain',
+    unit: 'mm',
+    min: 1,
+    max: 1000,
+    tool: 'rule',
+    error: 0.5,
+    again: 'Measure the piece across the grain.',
+    slips: ['lost point'],
+  },
+  moisture: {
+    label: 'Moisture content of the wood',
+    unit: '%',
+    min: 0,
+    max: 30,
+    tool: 'worked out or moisture meter',
+    error: 1,
+    again: 'Above 30 % wood no longer moves. Work it out from temperature and humidity.',
+    slips: ['fraction', 'lost point'],
+  },
+  shrinkage: {
+    label: 'Shrinkage, green to ovendry',
+    unit: '%',
+    min: 0.1,
+    max: 20,
+    tool: 'table of woods',
+    error: null,
+    again: 'Take it from a table of woods.',
+    slips: ['fraction', 'lost point'],
+  },
+  movement: {
+    label: 'Movement per % of moisture',
+    unit: '',
+    min: 0.0001,
+    max: 0.01,
+    tool: 'table of woods',
+    error: null,
+    again: 'Choose the wood from the list.',
+  },
+} as const satisfies Record<string, Field>;
