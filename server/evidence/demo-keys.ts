@@ -1,4 +1,4 @@
-import { existsSync, writeFileSync } from 'node:fs';
+import { existsSync, mkdirSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { env, isLoopback } from '#server/env.ts';
 
@@ -6,6 +6,7 @@ const note = () => join(env().KEYS_DIR, 'DEMO-KEYS.txt');
 
 /** Leaves a note beside keys that were made for a demonstration. */
 export function noteDemoKeys(): void {
+  mkdirSync(env().KEYS_DIR, { recursive: true, mode: 0o700 });
   writeFileSync(note(), 'Keys made for a demonstration. They sign nothing for other people.\n');
 }
 

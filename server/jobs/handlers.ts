@@ -1,7 +1,9 @@
+import { signHead } from '../evidence/sign-head.ts';
 import { sendMail } from '../mail/send-mail.ts';
 import type { Handler } from './job.ts';
 
 /** What does each kind of job: one line per kind. */
 export const handlers: Record<string, Handler> = {
   mail: sendMail,
+  'sign-head': async () => void (await signHead()),
 };

@@ -1,6 +1,7 @@
 import { Conflict, NotFound } from '#domain/errors.ts';
 import { demand } from '#domain/rights.ts';
 import type { Viewer } from '#domain/viewer.ts';
+import { recordAct } from '#server/audit/record-act.ts';
 import { run, select, transaction, type Transaction } from '#server/db/sql.ts';
 import { lockCase, staffOnly } from './lock-case.ts';
 import { sealEvent } from './seal-event.ts';
@@ -81,6 +82,12 @@ export async function changeVisibility(
       names: [commitment],
       by: staff,
       now,
+    });
+    await recordAct(tx, staff, {
+      act: 'changed visibility',
+      caseId: repair.id,
+      subjectId: input.entryId,
+      detail: input.to,
     });
   });
 }

@@ -1,12 +1,13 @@
 import { Conflict } from '#domain/errors.ts';
 import { demand } from '#domain/rights.ts';
 import type { Viewer } from '#domain/viewer.ts';
+import { recordAct } from '#server/audit/record-act.ts';
 import { run, select, transaction, type Transaction } from '#server/db/sql.ts';
 import { chainOf } from './chain-of.ts';
 import { lockCase, staffOnly, type LockedCase } from './lock-case.ts';
 import { sealEvent } from './seal-event.ts';
 import { staffPart, type Person } from './person-in-record.ts';
-import { tellOwner } from './tell-owner.ts';
+import { mailOwner } from './mail-owner.ts';
 
 async function refuseOpenDrafts(tx: Transaction, caseId: string): Promise<void> {
   const drafts = await select<{ title: string | null }>(
@@ -67,7 +68,7 @@ export async function closeCase(
       throw new Conflict('Nothing is sealed in this case. Seal at least one entry, then close it.');
     }
     const { recordedAt } = await sealClose(tx, repair, staff, now);
-    const told = await tellOwner(tx, repair.id, `ready-to-go-home/${repair.id}`, (about) => ({
+    const told = await mailOwner(tx, repair.id, `ready-to-go-home/${repair.id}`, (about) => ({
       template: 'ready-to-go-home',
       data: about,
     }));
@@ -76,5 +77,6 @@ export async function closeCase(
       [recordedAt, told ? recordedAt : null, repair.id],
       tx,
     );
+    await recordAct(tx, staff, { act: 'closed the case', caseId: repair.id });
   });
 }

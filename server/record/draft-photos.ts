@@ -14,6 +14,7 @@ export interface DraftPin {
 /** A photo of a draft with both hashes that are sealed. */
 export interface DraftPhoto {
   linkId: string;
+  photoId: string;
   n: number;
   visibility: 'shared' | 'bench';
   caption: string | null;
@@ -26,6 +27,7 @@ export interface DraftPhoto {
 
 interface Row {
   id: string;
+  photo_id: string;
   number: number;
   visibility: 'shared' | 'bench';
   caption: string | null;
@@ -63,7 +65,7 @@ export async function draftPhotos(
   visibility: 'shared' | 'bench',
 ): Promise<DraftPhoto[]> {
   const rows = await select<Row>(
-    `SELECT l.id, f.number, l.visibility, l.caption, f.state, f.sha256, c.sha256 AS published,
+    `SELECT l.id, l.photo_id, f.number, l.visibility, l.caption, f.state, f.sha256, c.sha256 AS published,
             f.taken_clock, f.taken_offset
      FROM entry_photos l
      JOIN photos f ON f.id = l.photo_id
@@ -81,6 +83,7 @@ export async function draftPhotos(
   );
   return rows.map(readyRow).map((row) => ({
     linkId: row.id,
+    photoId: row.photo_id,
     n: row.number,
     visibility: visibility === 'bench' ? 'bench' : row.visibility,
     caption: row.caption,

@@ -47,10 +47,21 @@ interface Row {
 
 const SEALED = 'This entry is sealed already. To correct it, add a correction beside it.';
 
+function refuseWhileGoingUp({ expected }: EntryDraft, photos: DraftPhoto[]): void {
+  const up = new Set(photos.map(({ photoId }) => photoId));
+  const missing = expected.filter(({ photoId }) => !up.has(photoId)).length;
+  if (missing === 0) return;
+  throw new Conflict(
+    missing === 1
+      ? '1 photo is still going up. Wait for it, or take it off the entry.'
+      : `${missing} photos are still going up. Wait for them, or take them off the entry.`,
+  );
+}
+
 /**
  * Reads a draft of a case under lock.
  * @throws NotFound when the case has no such entry, Conflict when it is sealed or a photo of it is
- *   not ready
+ *   not up or not ready
  */
 export async function draftToSeal(
   tx: Transaction,
@@ -71,6 +82,9 @@ export async function draftToSeal(
   if (!row) throw new NotFound();
   if (row.draft === null) throw new Conflict(SEALED);
   const { name, role, number, product, started_at: startedAt } = row;
+  const draft = EntryDraftSchema.parse(JSON.parse(row.draft));
+  const photos = await draftPhotos(tx, entryId, row.visibility);
+  refuseWhileGoingUp(draft, photos);
   return {
     id: row.id,
     kind: row.kind,
@@ -79,7 +93,7 @@ export async function draftToSeal(
     amendsId: row.amends_id,
     occurredAt: row.occurred_at,
     writtenBy: row.written_by,
-    draft: EntryDraftSchema.parse(JSON.parse(row.draft)),
+    draft,
     author: name !== null && role && number !== null ? { name, role, number } : null,
     rest:
       product !== null && startedAt
@@ -91,6 +105,6 @@ export async function draftToSeal(
             stringsAt: row.strings_at,
           }
         : null,
-    photos: await draftPhotos(tx, entryId, row.visibility),
+    photos,
   };
 }

@@ -1,6 +1,7 @@
 import { Conflict } from '#domain/errors.ts';
 import { demand } from '#domain/rights.ts';
 import type { Viewer } from '#domain/viewer.ts';
+import { recordAct } from '#server/audit/record-act.ts';
 import { run, transaction } from '#server/db/sql.ts';
 import { chainOf } from './chain-of.ts';
 import { sealClose } from './close-case.ts';
@@ -41,5 +42,6 @@ export async function handBack(
       now,
     });
     await run('UPDATE cases SET handed_back_at = ? WHERE id = ?', [recordedAt, repair.id], tx);
+    await recordAct(tx, staff, { act: 'handed back', caseId: repair.id });
   });
 }

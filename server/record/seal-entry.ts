@@ -2,6 +2,7 @@ import { Conflict } from '#domain/errors.ts';
 import { demand } from '#domain/rights.ts';
 import type { Viewer } from '#domain/viewer.ts';
 import { isStoryKind, type CaseKind } from '#evidence/seal/kinds.ts';
+import { recordAct } from '#server/audit/record-act.ts';
 import { touchCase } from '#server/cases/touch-case.ts';
 import { run, transaction, type Transaction } from '#server/db/sql.ts';
 import { appendEntry, type Appended } from '#server/evidence/append-entry.ts';
@@ -10,7 +11,7 @@ import { draftToSeal, type DraftToSeal } from './draft-to-seal.ts';
 import { entryParts } from './entry-parts.ts';
 import { lockCase, staffOnly } from './lock-case.ts';
 import { partyParts } from './party-parts.ts';
-import { tellOwner } from './tell-owner.ts';
+import { mailOwner } from './mail-owner.ts';
 
 /** What was sealed: the index of its leaf and its leaf hash in hex. */
 export interface Sealed {
@@ -87,9 +88,10 @@ export async function sealEntry(
     });
     await moveWords(tx, entry, appended, staff.personId);
     await touchCase(tx, repair.id);
+    await recordAct(tx, staff, { act: 'sealed an entry', caseId: repair.id, subjectId: entry.id });
     if (entry.visibility === 'shared') {
       const { title } = entry.draft;
-      await tellOwner(tx, repair.id, `entry-shared/${entry.id}`, (about) => ({
+      await mailOwner(tx, repair.id, `entry-shared/${entry.id}`, (about) => ({
         template: 'entry-shared',
         data: { ...about, title },
       }));

@@ -26,7 +26,7 @@ interface Row {
  * @param mail makes template and data from what every mail says
  * @returns whether there is an address to write to
  */
-export async function tellOwner(
+export async function mailOwner(
   tx: Transaction,
   caseId: string,
   onceKey: string,
