@@ -2,8 +2,8 @@ import { concat } from '#evidence/bytes/concat.ts';
 import { EncodingError } from '#evidence/errors.ts';
 import { unknownForm } from '#evidence/shape/read-shape.ts';
 
-/** Length of a log entry: its first byte, the slot tag, the header's commitment. */
-export const ENTRY_BYTES = 65;
+/** First byte, slot tag, the header's commitment. */
+const ENTRY_BYTES = 65;
 const FIRST_BYTE = 2;
 
 /**
@@ -19,13 +19,16 @@ export function logEntry(tag: Uint8Array, commitment: Uint8Array): Uint8Array {
   return concat(Uint8Array.of(FIRST_BYTE), tag, commitment);
 }
 
+/** Whether an entry has the length and first byte this program knows. */
+export function isKnownEntry(entry: Uint8Array): boolean {
+  return entry.length === ENTRY_BYTES && entry[0] === FIRST_BYTE;
+}
+
 /**
  * Takes a log entry apart.
  * @throws UnknownFormError for another length or first byte
  */
 export function readLogEntry(entry: Uint8Array): { tag: Uint8Array; commitment: Uint8Array } {
-  if (entry.length !== ENTRY_BYTES || entry[0] !== FIRST_BYTE) {
-    throw unknownForm('A log entry of this length or first byte');
-  }
+  if (!isKnownEntry(entry)) throw unknownForm('A log entry of this length or first byte');
   return { tag: entry.slice(1, 33), commitment: entry.slice(33) };
 }
