@@ -38,7 +38,7 @@ const keepFeatures = ['kern', 'liga', 'tnum'];
 const cuts = [
   ['serif-text-400', serif, latin, { opsz: 17, wght: 400 }],
   ['serif-head-500', serif, latin, { opsz: 28, wght: 500 }],
-  ['serif-large-440', serif, largeWords, { opsz: 60, wght: 440 }],
+  ['serif-large-450', serif, largeWords, { opsz: 48, wght: 450 }],
   ['serif-figures-italic-400', serifItalic, figures, { opsz: 19, wght: 400 }],
   ['sans-400', sans(400), latin],
   ['sans-600', sans(600), latin],

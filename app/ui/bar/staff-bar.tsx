@@ -69,15 +69,20 @@ export function StaffBar(props: Props) {
         <Icon name="search" size={22} />
       </Link>
       <details className="bar-menu">
-        <summary className="max-phone:hidden">
-          {person}
-          <small>{shop}</small>
-        </summary>
-        <summary aria-label="Menu" className="phone:hidden">
+        <summary>
+          <span>
+            {person}
+            <small>{shop}</small>
+          </span>
           <Icon name="menu" size={24} />
         </summary>
         <div className="bar-menu-sheet">
-          {nav('phone:hidden')}
+          <p className="bar-menu-who">
+            <b>{person}</b>
+            <br />
+            {shop}
+          </p>
+          {nav('bar-menu-nav')}
           {menu}
         </div>
       </details>

@@ -40,7 +40,7 @@ export function WhatIsNext({ next, children }: Props) {
           ))}
         </ol>
       )}
-      {children && <div className="next-do mt-4.5 grid gap-2.5">{children}</div>}
+      {children && <div className="next-do">{children}</div>}
       <dl className="next-facts">
         {next.facts.map((fact) => (
           <div key={fact.label}>
