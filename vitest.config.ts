@@ -18,11 +18,18 @@ export default defineConfig({
         test: {
           name: 'pure',
           include: [
-            '{domain,evidence,local,scripts}/**/*.test.ts',
+            '{domain,evidence}/**/*.test.ts',
             'app/*.test.{ts,tsx}',
             'app/{ui,lib}/**/*.test.{ts,tsx}',
             'tests/boundaries.test.ts',
           ],
+        },
+      },
+      {
+        extends: true,
+        test: {
+          name: 'machine',
+          include: ['{local,scripts}/**/*.test.ts'],
         },
       },
       {

@@ -1,3 +1,4 @@
+import { realpathSync } from 'node:fs';
 import { fileURLToPath } from 'node:url';
 import { sentenceFor } from '../scripts/sentences.mjs';
 
@@ -19,7 +20,8 @@ export async function runAsProgram<Options>(
   moduleUrl: string,
   start: (options: Options) => Promise<StandIn>,
 ): Promise<void> {
-  if (process.argv[1] !== fileURLToPath(moduleUrl)) return;
+  const program = process.argv[1];
+  if (!program || realpathSync(program) !== fileURLToPath(moduleUrl)) return;
   try {
     const running = await start(JSON.parse(process.env.STAND_IN ?? '{}') as Options);
     const stop = () => void running.stop().then(() => process.exit(0));

@@ -36,7 +36,7 @@ try {
     await check('types', types);
     await check('lint', () => program('node_modules/eslint/bin/eslint.js', ['.']));
     await check('build', () => build(root, say));
-    await tests('pure', 'services');
+    await tests('pure', 'machine', 'services');
     await tests('journeys');
   }
 } catch (error) {
