@@ -192,7 +192,7 @@ describe('an identity provider in trouble', () => {
 
   it.each([
     ['is gone', () => HttpResponse.error()],
-    ['refuses', () => HttpResponse.text('out of order', { status: 500 })],
+    ['refuses', () => new HttpResponse(null, { status: 500 })],
     ['does not know us', () => HttpResponse.json({ error: 'invalid_client' }, { status: 401 })],
   ] as [string, () => Response][])(
     'that %s when they come back is said plainly',

@@ -145,10 +145,10 @@ describe('a sign-in code', () => {
 describe('an address nobody knows', () => {
   async function statementsOf(work: () => Promise<unknown>): Promise<string[]> {
     const seen: string[] = [];
-    const pool = database();
-    pool.options.logging = (sql) => seen.push(sql.replace(/\([0-9a-f-]{36}\)|default/g, ''));
+    const { options } = database() as unknown as { options: { logging: unknown } };
+    options.logging = (sql: string) => seen.push(sql.replace(/\([0-9a-f-]{36}\)|default/g, ''));
     await work().finally(() => {
-      pool.options.logging = false;
+      options.logging = false;
     });
     return seen;
   }
