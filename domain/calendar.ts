@@ -93,3 +93,10 @@ export function warrantyTerm(completedAt: Date, zone: string, months: number): W
   const lastDay = addMonths(startsOn, months);
   return { startsOn, lastDay, endsAt: startOfDay(addDays(lastDay, 1), zone) };
 }
+
+/** A day in full words for letters: "Friday 24 April 2026". */
+export function dayInWords(day: Day): string {
+  const words = { weekday: 'long', day: 'numeric', month: 'long', year: 'numeric' } as const;
+  // Some versions of the locale data put a comma after the weekday.
+  return Temporal.PlainDate.from(day).toLocaleString('en-GB', words).replace(',', '');
+}

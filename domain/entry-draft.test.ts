@@ -33,7 +33,13 @@ describe('an entry as typed', () => {
       humidity: '48.5',
       minutes: 45,
       occurredClock: null,
+      expected: [],
     });
+  });
+
+  it('reads what it has kept itself', () => {
+    const kept = parseInput(EntrySchema, entry);
+    expect(parseInput(EntrySchema, JSON.parse(JSON.stringify(kept)))).toEqual(kept);
   });
 
   it('needs a title and nothing else', () => {
@@ -48,6 +54,7 @@ describe('an entry as typed', () => {
       minutes: null,
       occurredClock: null,
       rest: null,
+      expected: [],
     });
   });
 

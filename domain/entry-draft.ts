@@ -44,6 +44,14 @@ const restHours = (what: string) => figure(what, '\u00a0h', 0.1, LONGEST_REST);
 const later = (a: string | null, b: string | null) =>
   a !== null && b !== null && Number(b) < Number(a);
 
+/** What a photo shows, in one entry, and who may see it there. */
+export const PhotoLinkSchema = z.object({
+  photoId: z.uuid(),
+  caption: optionalText('The caption', 400),
+  visibility: z.enum(VISIBILITIES),
+});
+export type PhotoLink = z.output<typeof PhotoLinkSchema>;
+
 /** A rest as written down: the product, and hours from its start to each of the times that are used. */
 export const RestDraftSchema = z
   .object({
@@ -112,22 +120,17 @@ export const EntryDraftSchema = z.object({
     'This is no date and time. Choose both, or leave it empty for now.',
   ),
   rest: RestDraftSchema.nullish().transform((rest) => rest ?? null),
+  /** Photos of this entry that are not up yet, with what is to be said of them once they are. */
+  expected: z.array(PhotoLinkSchema).default([]),
 });
 export type EntryDraft = z.output<typeof EntryDraftSchema>;
-
-/** What a photo shows, in one entry, and who may see it there. */
-export const PhotoLinkSchema = z.object({
-  photoId: z.uuid(),
-  caption: optionalText('The caption', 400),
-  visibility: z.enum(VISIBILITIES),
-});
-export type PhotoLink = z.output<typeof PhotoLinkSchema>;
 
 /** An entry as its form sends it. */
 export const EntrySchema = z.object({
   phase: z.enum(PHASES, { error: 'Is it before, during or after the work? Choose one.' }),
   visibility: z.enum(VISIBILITIES, { error: 'Who may see it? Choose one.' }),
   draft: EntryDraftSchema,
+  /** The entry's photos, up or still going up. */
   photos: z
     .array(PhotoLinkSchema)
     .default([])
@@ -135,5 +138,7 @@ export const EntrySchema = z.object({
       (list) => list.length <= 100,
       'A hundred photos are the most an entry holds. Add another entry for the rest.',
     ),
+  /** Ids of photos that are to leave the entry; they stay in the case. */
+  takeOff: z.array(z.uuid()).default([]),
 });
 export type EntryInput = z.output<typeof EntrySchema>;

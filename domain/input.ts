@@ -18,8 +18,8 @@ const lengthOf = (text: string) => [...text].length;
 export function text(what: string, most: number) {
   return z
     .string()
-    .default('')
-    .transform(tidy)
+    .nullish()
+    .transform((value) => tidy(value ?? ''))
     .superRefine((value, context) => {
       const length = lengthOf(value);
       if (length > most)
