@@ -1,11 +1,13 @@
 import { randomBytes } from 'node:crypto';
+import type { IncomingMessage } from 'node:http';
 import { exportJWK, generateKeyPair } from 'jose';
 import type { JWK } from 'jose';
-import type { Configuration, Provider, interactionPolicy } from 'oidc-provider';
+import type { Configuration, Provider } from 'oidc-provider';
 import { demoStaff } from './demo-staff.ts';
 import { FaultSwitch, failing, withSwitch } from './faults.ts';
 import type { Fault } from './faults.ts';
 import { interactionPath, serveInteraction } from './identity-page.ts';
+import { escapeHtml, page, pageHeaders } from './page.ts';
 import { freePort } from './ports.ts';
 import { runAsProgram } from './stand-in.ts';
 import type { StandIn } from './stand-in.ts';
@@ -24,6 +26,13 @@ export interface Identity extends StandIn {
   issuer: string;
   fault: (fault: Fault) => Promise<void>;
 }
+
+const tenMinutes = 600;
+const cookieNames = {
+  session: 'local_identity_session',
+  interaction: 'local_identity_interaction',
+  resume: 'local_identity_resume',
+};
 
 /**
  * Starts the identity provider on 127.0.0.1: OAuth2 and OpenID Connect with PKCE (S256) required, one confidential
@@ -45,6 +54,7 @@ export async function startIdentity(options: IdentityOptions): Promise<Identity>
         faults,
         (response) => response.writeHead(500).end('The identity provider is out of order.\n'),
         (request, response) => {
+          forgetSession(request);
           if (request.url?.startsWith(interactionPath))
             void serveInteraction(provider, request, response);
           else void oidc(request, response);
@@ -59,24 +69,13 @@ async function createProvider(issuer: string, options: IdentityOptions): Promise
   const { privateKey } = await generateKeyPair('ES256', { extractable: true });
   const signingKey = { ...(await exportJWK(privateKey)), use: 'sig' };
   return quietly(async () => {
-    const { default: Provider, interactionPolicy } = await import('oidc-provider');
-    const policy = interactionPolicy.base();
-    policy
-      .get('login')
-      ?.checks.add(
-        new interactionPolicy.Check(
-          'always_choose',
-          'Each sign-in chooses a person.',
-          (context) => context.oidc.result?.login === undefined,
-        ),
-      );
-    return new Provider(issuer, configuration(options, policy, signingKey));
+    const { default: Provider } = await import('oidc-provider');
+    return new Provider(issuer, configuration(options, signingKey));
   });
 }
 
 function configuration(
   { clientId, clientSecret, redirectUris }: IdentityOptions,
-  policy: interactionPolicy.DefaultPolicy,
   signingKey: JWK,
 ): Configuration {
   return {
@@ -113,20 +112,34 @@ function configuration(
       return grant;
     },
     interactions: {
-      policy,
       url: (_context, interaction) => `${interactionPath}${interaction.uid}`,
     },
     features: { devInteractions: { enabled: false }, rpInitiatedLogout: { enabled: false } },
+    ttl: {
+      AccessToken: tenMinutes,
+      AuthorizationCode: 60,
+      Grant: tenMinutes,
+      IdToken: tenMinutes,
+      Interaction: tenMinutes,
+      Session: tenMinutes,
+    },
+    renderError: (context, { error, error_description: description }) => {
+      const words = `<p>${escapeHtml(description ?? error)}</p>`;
+      context.set(pageHeaders);
+      context.body = page('This sign-in cannot go on', words);
+    },
     // A browser does not keep cookies of two ports of one host apart.
     cookies: {
       keys: [randomBytes(32).toString('hex')],
-      names: {
-        session: 'local_identity_session',
-        interaction: 'local_identity_interaction',
-        resume: 'local_identity_resume',
-      },
+      names: cookieNames,
     },
   };
+}
+
+/** Takes away what the browser remembers, so that each sign-in asks who it is: a bench has one tablet for all. */
+function forgetSession({ headers }: IncomingMessage): void {
+  const cookies = headers.cookie?.split('; ') ?? [];
+  headers.cookie = cookies.filter((cookie) => !cookie.startsWith(cookieNames.session)).join('; ');
 }
 
 /** Runs `work` without the provider's warnings about this Node version and its store in memory. */
