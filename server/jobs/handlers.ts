@@ -1,9 +1,11 @@
 import { signHead } from '../evidence/sign-head.ts';
 import { sendMail } from '../mail/send-mail.ts';
+import { derivePhoto } from '../photos/derive-photo.ts';
 import type { Handler } from './job.ts';
 
 /** What does each kind of job: one line per kind. */
 export const handlers: Record<string, Handler> = {
   mail: sendMail,
+  'derive-photo': derivePhoto,
   'sign-head': async () => void (await signHead()),
 };

@@ -2,6 +2,7 @@ import { setPriority } from 'node:os';
 import { sweepExpired } from '../auth/sweep-expired.ts';
 import { closeDatabase } from '../db/connection.ts';
 import { log } from '../log.ts';
+import { sweepObjects } from '../photos/sweep-objects.ts';
 import { startWork } from './work-loop.ts';
 
 // The worker process: does the outbox's jobs after the web tier's own work, in priority and in time.
@@ -9,8 +10,10 @@ const HOUR_MS = 60 * 60 * 1000;
 
 setPriority(10);
 
-const sweep = () =>
-  void sweepExpired().catch((error: unknown) => log.warn({ err: error }, 'nothing was swept'));
+const sweep = () => {
+  for (const one of [sweepExpired, sweepObjects])
+    one().catch((error: unknown) => log.warn({ err: error }, 'nothing was swept'));
+};
 const sweeping = setInterval(sweep, HOUR_MS);
 sweep();
 

@@ -8,6 +8,9 @@ import { Instrument } from './instrument.ts';
 import { Outbox } from './outbox.ts';
 import { Party } from './party.ts';
 import { Person } from './person.ts';
+import { PhotoCopy } from './photo-copy.ts';
+import { Photo } from './photo.ts';
+import { Pin } from './pin.ts';
 import { Rest } from './rest.ts';
 import { Session } from './session.ts';
 import { Shop } from './shop.ts';
@@ -24,6 +27,9 @@ const models = [
   Outbox,
   Party,
   Person,
+  Photo,
+  PhotoCopy,
+  Pin,
   Rest,
   Session,
   Shop,
