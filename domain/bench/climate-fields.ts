@@ -1,19 +1,20 @@
 import type { Field } from './field.ts';
 
 /**
- * Readings of air and wood. Temperature reaches from the first row of the moisture table (30 °F)
- * to 50 °C; humidity over the columns of that table. Errors: common practice.
+ * Readings of air and wood. Temperature reaches from the first row of the moisture table (30 °F,
+ * −1.1 °C) to 50 °C; humidity over the columns of that table. Errors: common practice.
  */
 export const CLIMATE_FIELDS = {
   temperature: {
     label: 'Temperature',
     unit: '°C',
-    min: -10 / 9,
+    min: -1.2,
     max: 50,
     usual: [5, 40],
     tool: 'thermometer',
     error: 0.5,
-    again: 'Outside the table. Read the thermometer again: °C or °F?',
+    outside: 'Outside the table.',
+    again: 'Read the thermometer again: °C or °F?',
     slips: ['other temperature', 'lost point'],
   },
   humidity: {
@@ -24,7 +25,8 @@ export const CLIMATE_FIELDS = {
     usual: [20, 80],
     tool: 'hygrometer',
     error: 3,
-    again: 'Outside the table. Read the hygrometer again after ten minutes in the room.',
+    outside: 'Outside the table.',
+    again: 'Read the hygrometer again after ten minutes in the room.',
     slips: ['fraction', 'lost point', 'extra digit'],
   },
   airHumidity: {
@@ -35,7 +37,8 @@ export const CLIMATE_FIELDS = {
     usual: [20, 80],
     tool: 'hygrometer',
     error: 3,
-    again: 'Air holds from 1 to 100 %. Read the hygrometer again after ten minutes in the room.',
+    outside: 'No air is like that.',
+    again: 'Read the hygrometer again after ten minutes in the room.',
     slips: ['fraction', 'lost point', 'extra digit'],
   },
   woodWidth: {
@@ -55,7 +58,8 @@ export const CLIMATE_FIELDS = {
     max: 30,
     tool: 'worked out or moisture meter',
     error: 1,
-    again: 'Above 30 % wood no longer moves. Work it out from temperature and humidity.',
+    above: 'Above 30 % wood no longer moves.',
+    again: 'Work it out from temperature and humidity.',
     slips: ['fraction', 'lost point'],
   },
   shrinkage: {

@@ -15,9 +15,10 @@ export interface Field {
   tool: string;
   /** Typical error of that instrument, ±, in the unit of the field; null where a share or none. */
   error: number | null;
-  /** What to do after a refusal. */
+  /** What to do after a refusal: what to measure or choose again. */
   again: string;
-  /** Instead of `again` for a value below or above the range. */
+  /** What is wrong with a number outside the range; below or above it where that differs. */
+  outside?: string;
   below?: string;
   above?: string;
   /** Some ways a number for this field goes wrong; see probable-meaning.ts. */

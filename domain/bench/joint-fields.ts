@@ -51,6 +51,7 @@ export const JOINT_FIELDS = {
     max: 45,
     tool: 'worked out or digital level',
     error: 0.5,
+    below: 'The string would rise from its slot: check the heights above the face.',
     again: 'It is the angle the string turns through at the nut, seen from the side.',
   },
   jointSize: {
@@ -59,7 +60,7 @@ export const JOINT_FIELDS = {
     min: 1,
     max: 300,
     again: 'Measure it again with a caliper.',
-    below: 'Zero or negative size. Measure it again with a caliper.',
+    below: 'Zero or negative size, or too small for a joint.',
   },
   faceAngle: {
     label: 'Slant of the joint to the neck',
@@ -125,15 +126,6 @@ export const JOINT_FIELDS = {
     tool: 'worked out',
     error: null,
     again: 'It is the pull times its distance from the middle of the section.',
-  },
-  jointArea: {
-    label: 'Glued area, mm²',
-    unit: '',
-    min: 1,
-    max: 100000,
-    tool: 'worked out',
-    error: null,
-    again: 'Work it out from the sizes of the joint.',
   },
   shearStrength: {
     label: 'Shear strength of the wood along the grain',

@@ -81,7 +81,7 @@ export function probableMeaning(
   for (const slip of field.slips ?? []) {
     for (const candidate of READERS[slip](given, decimal)) {
       const value = convert(candidate.number, candidate.unit, field.unit);
-      if (value < low || value > high) continue;
+      if (!(value >= low && value <= high)) continue;
       const kept = plainAmount(value, field.unit, decimal);
       const words =
         candidate.unit === field.unit ? candidate.words : `${candidate.words}, which is ${kept}`;

@@ -30,7 +30,8 @@ export function readReading(text: string, id: FieldId, as: ReadAs): Reading {
   const field = fieldOf(id);
   const typed = text.trim();
   const parsed = parseTypedNumber(text, as.decimal);
-  const unit = unitOf(id, parsed.suffix, as.unit, typed);
+  const hasUnit = parsed.ok || parsed.code === 'which-decimal';
+  const unit = hasUnit ? unitOf(id, parsed.suffix, as.unit, typed) : as.unit;
   if (!parsed.ok) throw refused(id, parsed.code, typed, meantOf(id, parsed.meanings, unit, as));
   if (parsed.fraction && unit === 'mm') {
     const value = convert(parsed.value, 'in', field.unit);
@@ -52,7 +53,7 @@ export function readReading(text: string, id: FieldId, as: ReadAs): Reading {
 
 function unitOf(id: FieldId, suffix: string, usual: Unit, typed: string): Unit {
   const field = fieldOf(id);
-  if (suffix === '' || suffix === typed) return usual;
+  if (suffix === '') return usual;
   const unit = unitByWord(suffix);
   if (unit !== undefined && quantityOf(unit) === quantityOf(field.unit)) return unit;
   throw new BadReading({

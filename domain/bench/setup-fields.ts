@@ -18,8 +18,8 @@ export const SETUP_FIELDS = {
     max: 50,
     tool: 'tuner',
     error: 1,
-    again:
-      'Far too much: wrong note, wrong fret, or the bridge in the wrong place. Tune the open string and read the 12th fret again.',
+    outside: 'Far too much: wrong note, wrong fret, or the bridge in the wrong place.',
+    again: 'Tune the open string and read the 12th fret again.',
     slips: ['lost point'],
   },
   compensation: {
@@ -57,8 +57,8 @@ export const SETUP_FIELDS = {
     max: 1.5,
     tool: 'feeler gauge or dial',
     error: 0.02,
-    again:
-      'More than 1.5 mm is a fault of the first fret space, not compensation. Measure it again.',
+    above: 'More than 1.5 mm is a fault of the first fret space, not compensation.',
+    again: 'Measure it again.',
     slips: ['lost point'],
   },
   stringHeight: {
@@ -110,7 +110,7 @@ export const SETUP_FIELDS = {
     tool: 'feeler gauges',
     error: 0.02,
     again: 'Measure with feelers under a straightedge on the first two frets.',
-    below: 'Slot below the fret plane: it will buzz. Fill and recut.',
+    below: 'Slot below the fret plane: it will buzz, fill and recut.',
     slips: ['thousandths', 'lost point'],
   },
   postX: {
@@ -120,10 +120,9 @@ export const SETUP_FIELDS = {
     max: 220,
     tool: 'rule',
     error: 0.5,
-    again:
-      'Post under the nut: check coordinates. Measure from the front edge of the nut to the middle of the post.',
-    above:
-      'Further than posts stand. Measure from the front edge of the nut to the middle of the post.',
+    below: 'Post under the nut: check coordinates.',
+    above: 'Further than posts stand.',
+    again: 'Measure from the front edge of the nut to the middle of the post.',
     slips: ['other length', 'centimetres', 'lost point'],
   },
   acrossY: {
@@ -155,8 +154,7 @@ export const SETUP_FIELDS = {
     tool: 'rule or feeler gauges',
     error: 0.1,
     again: 'Measure from the fret top to the bottom of the string, at pitch.',
-    below:
-      'Negative clearance: it touches there. Measure from the fret top to the bottom of the string.',
+    below: 'Negative clearance: it touches there.',
     slips: ['64ths', 'thousandths', 'other length', 'lost point'],
   },
   actionChange: {
@@ -198,9 +196,9 @@ export const SETUP_FIELDS = {
     max: 600,
     tool: 'radius gauge',
     error: null,
-    again: 'Try the next radius gauge, in the middle of the string.',
-    below: 'A flat board has no radius: choose flat, not 0. Try a radius gauge.',
-    above: 'As good as flat: choose flat, or try a radius gauge.',
+    below: 'A flat board has no radius: choose flat, not 0.',
+    above: 'As good as flat: choose flat.',
+    again: 'Try a radius gauge on the board.',
     slips: ['other length', 'centimetres', 'lost point'],
   },
   jointFret: {

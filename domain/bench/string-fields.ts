@@ -13,8 +13,8 @@ export const STRING_FIELDS = {
     max: 1100,
     tool: 'steel rule, nut to 12th fret, doubled',
     error: 0.3,
-    again:
-      'Check units: mm or inches? Measure from the front edge of the nut to the 12th fret and double it.',
+    outside: 'Check units: mm or inches?',
+    again: 'Measure from the front edge of the nut to the 12th fret and double it.',
     slips: ['other length', 'centimetres', 'lost point'],
   },
   gauge: {
@@ -25,7 +25,8 @@ export const STRING_FIELDS = {
     usual: [0.2, 1.5],
     tool: 'micrometer',
     error: 0.005,
-    again: 'Outside string sizes; measure the string again with a micrometer.',
+    outside: 'Outside string sizes.',
+    again: 'Measure the string again with a micrometer.',
     slips: ['thousandths', 'lost point', 'other length'],
   },
   plainGauge: {
@@ -35,9 +36,9 @@ export const STRING_FIELDS = {
     max: 1.0,
     tool: 'micrometer',
     error: 0.005,
-    again: 'Outside string sizes; measure the string again with a micrometer.',
-    above:
-      'Thicker than plain steel strings are made: is it wound? Measure it again with a micrometer.',
+    outside: 'Outside string sizes.',
+    again: 'Measure the string again with a micrometer.',
+    above: 'Thicker than plain steel strings are made: is it wound?',
     slips: ['thousandths', 'lost point', 'other length'],
   },
   softPlainGauge: {
@@ -47,7 +48,8 @@ export const STRING_FIELDS = {
     max: 1.6,
     tool: 'micrometer',
     error: 0.02,
-    again: 'Outside string sizes; measure the string again without squeezing it.',
+    outside: 'Outside string sizes.',
+    again: 'Measure the string again without squeezing it.',
     slips: ['thousandths', 'lost point', 'other length'],
   },
   woundGauge: {
@@ -57,8 +59,9 @@ export const STRING_FIELDS = {
     max: 3.6,
     tool: 'micrometer',
     error: 0.005,
-    again: 'Outside string sizes; measure the string again with a micrometer.',
-    below: 'Too thin to be wound, is it plain? Measure it again with a micrometer.',
+    outside: 'Outside string sizes.',
+    again: 'Measure the string again with a micrometer.',
+    below: 'Too thin to be wound, is it plain?',
     slips: ['thousandths', 'lost point', 'other length'],
   },
   core: {
@@ -78,7 +81,8 @@ export const STRING_FIELDS = {
     max: 5000,
     tool: 'tuner',
     error: null,
-    again: 'A pitch must be above 0 Hz. Read the tuner again.',
+    below: 'A pitch must be above 0 Hz, and strings sound from 10 Hz.',
+    again: 'Read the tuner again.',
   },
   a4: {
     label: 'Reference pitch of A4',
@@ -108,15 +112,6 @@ export const STRING_FIELDS = {
     tool: 'table of materials',
     error: null,
     again: 'Choose the material of the string from the list.',
-  },
-  packing: {
-    label: 'Share of the wrap that is metal',
-    unit: '',
-    min: 0.7,
-    max: 1,
-    tool: 'chosen by the kind of wrap',
-    error: null,
-    again: 'Choose round (0.785), or flat or ground wrap (0.90 to 0.98).',
   },
   stringPull: {
     label: 'Pull of one string',

@@ -42,4 +42,3 @@ export const WRAP_MATERIALS = {
 } as const satisfies Record<string, StringMaterial>;
 
 export type CoreMaterial = keyof typeof CORE_MATERIALS;
-export type WrapMaterial = keyof typeof WRAP_MATERIALS;

@@ -42,7 +42,8 @@ export function within(id: FieldId, value: number, typed?: TypedAs): number {
   if (value >= field.min && value <= field.max) return value;
   const decimal = typed?.decimal ?? '.';
   const meant = probableMeaning(field, typed ?? { number: value, unit: field.unit }, decimal);
-  const advice = (value < field.min ? field.below : field.above) ?? field.again;
+  const verdict = (value < field.min ? field.below : field.above) ?? field.outside;
+  const advice = verdict === undefined ? field.again : `${verdict} ${field.again}`;
   const range = `${plainAmount(field.min, '', decimal)} to ${plainAmount(field.max, field.unit, decimal)}`;
   const said = typed?.text ?? plainAmount(value, field.unit);
   throw new BadReading({

@@ -2,12 +2,7 @@ import { BadReading } from './bad-reading.ts';
 import { type About, bandByShare } from './figure.ts';
 import { type StringPull, pullWarnings } from './plain-string.ts';
 import { plainAmount } from './plain-number.ts';
-import {
-  CORE_MATERIALS,
-  type CoreMaterial,
-  WRAP_MATERIALS,
-  type WrapMaterial,
-} from './string-materials.ts';
+import { CORE_MATERIALS, WRAP_MATERIALS } from './string-materials.ts';
 import { type Sounding, tensionOf } from './string-tension.ts';
 import { within } from './within.ts';
 
@@ -27,7 +22,8 @@ export const WOUND_BANDS = { coreKnown: 0.05, coreAssumed: 0.08, flatOrLayered: 
 export interface WrapLayer {
   /** Over this layer, mm. */
   outerMm: number;
-  material?: WrapMaterial;
+  /** Of the wrap, 900 to 20000 kg/m³, see WRAP_MATERIALS; nickel-plated steel when left out. */
+  densityKgM3?: number;
   /** Flat, ground or round wrap. */
   flat?: boolean;
 }
@@ -35,7 +31,8 @@ export interface WrapLayer {
 export interface WoundString extends Sounding {
   /** Core, mm; across the flats when `hexCore`. null: 0.42 of the gauge is assumed. */
   coreMm: number | null;
-  coreMaterial?: CoreMaterial;
+  /** See CORE_MATERIALS; steel when left out. */
+  coreDensityKgM3?: number;
   hexCore?: boolean;
   /** From the inside out; the last one's `outerMm` is the gauge, 0.4 to 3.6 mm. */
   layers: readonly [WrapLayer, ...WrapLayer[]];
@@ -70,13 +67,16 @@ export function woundStringPull(string: WoundString): WoundPull {
   const gaugeMm = within('woundGauge', string.layers.at(-1)?.outerMm ?? NaN);
   const coreAssumed = string.coreMm === null;
   const coreMm = within('core', string.coreMm ?? ASSUMED_CORE_SHARE * gaugeMm);
-  const coreDensity = CORE_MATERIALS[string.coreMaterial ?? 'steel'].densityKgM3;
+  const coreDensity = within('density', string.coreDensityKgM3 ?? CORE_MATERIALS.steel.densityKgM3);
   const coreArea = string.hexCore ? HEX_AREA * coreMm ** 2 : (Math.PI / 4) * coreMm ** 2;
   let massPerLengthKgM = coreDensity * coreArea * 1e-6;
   let insideMm = string.hexCore ? HEX_CORNERS * coreMm : coreMm;
   for (const layer of string.layers) {
     thinner(insideMm, layer.outerMm);
-    const density = WRAP_MATERIALS[layer.material ?? 'nickel-plated steel'].densityKgM3;
+    const density = within(
+      'density',
+      layer.densityKgM3 ?? WRAP_MATERIALS['nickel-plated steel'].densityKgM3,
+    );
     massPerLengthKgM += ringMass(insideMm, layer.outerMm, density, layer.flat);
     insideMm = layer.outerMm;
   }

@@ -24,18 +24,12 @@ describe('moisture content of wood', () => {
   });
 });
 
-// Spellings of the cases for the woods of the program.
-const NAMES: Record<string, MovingWood> = {
-  'American beech': 'American beech',
-  'American mahogany': 'American mahogany',
-};
-
 describe('movement of woods', () => {
   const movement = casesOf(cases, 'wood.dim_coefficient', 11);
 
   it.each(movement)('$id', (one) => {
     const species = one.inputs['species'] as MovingWood;
-    const wood = WOOD_MOVEMENT[NAMES[species] ?? species];
+    const wood = WOOD_MOVEMENT[species];
     expectCase(one, { CR: wood.radial, CT: wood.tangential }, one.tolerance);
     expect(wood.basis).toBe(one.obtained === 'read' ? 'published' : 'from memory');
   });

@@ -2,7 +2,6 @@ import { describe, expect, it } from 'vitest';
 import { inharmonicity, partialSharpness, youngSharpness } from '#domain/bench/inharmonicity.ts';
 import { noteFrequency } from '#domain/bench/pitch.ts';
 import { plainStringPull } from '#domain/bench/plain-string.ts';
-import type { WrapMaterial } from '#domain/bench/string-materials.ts';
 import { type SetString, stringSetPull } from '#domain/bench/string-set.ts';
 import { convert, MM_PER_INCH } from '#domain/bench/units.ts';
 import { helixMassPerLength, ROUND_PACKING, woundStringPull } from '#domain/bench/wound-string.ts';
@@ -26,49 +25,25 @@ describe('pull of a plain string', () => {
   });
 });
 
-// Densities as the cases have them; the wrap is found by its own.
-const WRAPS: Record<number, WrapMaterial> = {
-  7900: 'nickel-plated steel',
-  8900: 'nickel',
-  8860: 'phosphor bronze',
-};
-
 describe('pull of a wound string', () => {
   it.each(casesOf(cases, 'string.tension.wound', 6))('$id', (one) => {
     const inputs = one.inputs as Inputs;
-    const { outer_in = NaN, core_in = NaN, wrap_density = NaN } = inputs;
+    const { outer_in = NaN, core_in = NaN, core_density = NaN, wrap_density = NaN } = inputs;
     expectNear(inputs['packing'] ?? NaN, ROUND_PACKING, { rel: 1e-12 });
-    expect(inputs['core_density']).toBe(7850);
-    const sounding = {
+    const pull = woundStringPull({
       scaleMm: inputs['scale_mm'] ?? NaN,
       frequencyHz: noteFrequency(inputs['midi'] ?? NaN),
-    };
-    const material = WRAPS[wrap_density];
-    const helix = helixMassPerLength(mm(core_in), mm(outer_in), 7850, wrap_density);
-    const pulled =
-      material === undefined
-        ? scaledWrap(mm(core_in), mm(outer_in), wrap_density, sounding)
-        : woundStringPull({
-            ...sounding,
-            coreMm: mm(core_in),
-            layers: [{ outerMm: mm(outer_in), material }],
-          });
-    const { massPerLengthKgM: mu_kg_m, tensionN: tension_n } = pulled;
-    const mu_exact_helix_kg_m = helix;
-    const actual = { mu_kg_m, tension_n, tension_lbf: lbf(tension_n), mu_exact_helix_kg_m };
+      coreMm: mm(core_in),
+      coreDensityKgM3: core_density,
+      layers: [{ outerMm: mm(outer_in), densityKgM3: wrap_density }],
+    });
+    const helix = helixMassPerLength(mm(core_in), mm(outer_in), core_density, wrap_density);
+    const { massPerLengthKgM: mu_kg_m, tensionN: tension_n } = pull;
+    const actual = { mu_kg_m, tension_n, tension_lbf: lbf(tension_n), mu_exact_helix_kg_m: helix };
     expectCase(one, actual, { rel: one.tolerance['rel'] });
     expectNear(mu_kg_m, helix, { rel: one.tolerance['helix_vs_closed_form_rel'] });
   });
 });
-
-/** A wrap of a density no listed material has: the mass of the wrap scales with its density. */
-function scaledWrap(coreMm: number, outerMm: number, density: number, sounding: Sounding) {
-  const steel = woundStringPull({ ...sounding, coreMm, layers: [{ outerMm }] });
-  const core = 7850 * (Math.PI / 4) * coreMm ** 2 * 1e-6;
-  const mass = core + ((steel.massPerLengthKgM - core) * density) / 7900;
-  return { massPerLengthKgM: mass, tensionN: (steel.tensionN * mass) / steel.massPerLengthKgM };
-}
-type Sounding = { scaleMm: number; frequencyHz: number };
 
 interface SetCase {
   scale_mm: number;
@@ -78,6 +53,7 @@ interface SetCase {
 describe('pull of a set', () => {
   it.each(casesOf(cases, 'string.set.total', 6))('$id', (one) => {
     const { scale_mm: scaleMm, strings } = one.inputs as unknown as SetCase;
+    expect(one.inputs).toMatchObject({ steel_density: 7850, wrap_density: 7900 });
     const set = strings.map(({ outer_in, core_in, midi }): SetString => {
       const sounding = { scaleMm, frequencyHz: noteFrequency(midi) };
       return core_in === null
