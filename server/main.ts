@@ -1,6 +1,7 @@
 import { createServer } from 'node:http';
 import type { Express } from 'express';
 import { env } from './env.ts';
+import { openLog } from './evidence/open-log.ts';
 import { log } from './log.ts';
 import { keepWorker } from './worker-process.ts';
 
@@ -42,6 +43,7 @@ async function main(): Promise<void> {
   const { createApp, closeDatabase, serverBuild } = await application();
   // Loaded before the first request, so that a broken build is told at the start.
   await serverBuild();
+  await openLog();
   const server = createServer(createApp());
   server.requestTimeout = REQUEST_MS;
   await new Promise<void>((resolve, reject) => {

@@ -10,7 +10,11 @@ const LIVED_LONG_MS = 60_000;
  * Keeps one worker process alive: starts it anew when it dies, later each time it dies young.
  * `stop` asks it to finish what it does and kills it after `capMs`.
  */
-export function keepWorker(): { stop: (capMs: number) => Promise<void> } {
+export function keepWorker(): {
+  stop: (capMs: number) => Promise<void>;
+  /** The process id of the one that runs now. */
+  pid: () => number | undefined;
+} {
   let child: ChildProcess | undefined;
   let again: ReturnType<typeof setTimeout> | undefined;
   let stopping = false;
@@ -30,6 +34,7 @@ export function keepWorker(): { stop: (capMs: number) => Promise<void> } {
   start();
 
   return {
+    pid: () => child?.pid,
     stop: async (capMs) => {
       stopping = true;
       clearTimeout(again);

@@ -1,6 +1,7 @@
 import { v7 } from 'uuid';
 import type { CustomerViewer, PublicViewer, StaffViewer } from '#domain/viewer.ts';
-import { run, type Transaction } from '../db/sql.ts';
+import { AuditRecord } from '../db/models/audit-record.ts';
+import type { Transaction } from '../db/sql.ts';
 
 /** Who acted: a viewer, or as much of one as a sign-in knows. */
 export type Actor =
@@ -25,19 +26,17 @@ export async function recordAct(
   { act, caseId = null, subjectId = null, detail = null }: Act,
   { now = new Date() } = {},
 ): Promise<void> {
-  await run(
-    `INSERT INTO audit_records (id, at, person_id, customer_id, act, case_id, subject_id, detail)
-     VALUES (:id, :now, :person, :customer, :act, :caseId, :subjectId, :detail)`,
+  await AuditRecord.create(
     {
       id: v7(),
-      now,
-      person: actor.kind === 'staff' ? actor.personId : null,
-      customer: actor.kind === 'customer' ? actor.customerId : null,
+      at: now,
+      personId: actor.kind === 'staff' ? actor.personId : null,
+      customerId: actor.kind === 'customer' ? actor.customerId : null,
       act,
       caseId,
       subjectId,
       detail,
     },
-    tx,
+    { transaction: tx },
   );
 }

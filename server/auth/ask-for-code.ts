@@ -1,7 +1,8 @@
 import { randomInt } from 'node:crypto';
 import { v7 } from 'uuid';
 import { Invalid } from '#domain/errors.ts';
-import { run, select, transaction } from '../db/sql.ts';
+import { SignInCode } from '../db/models/sign-in-code.ts';
+import { select, transaction } from '../db/sql.ts';
 import { MailAddressSchema } from '../mail/address.ts';
 import { queueMail } from '../mail/queue-mail.ts';
 import { countAsking } from './code-limits.ts';
@@ -45,11 +46,16 @@ export async function askForCode(
   const expiresAt = new Date(now.getTime() + CODE_MS);
   const customer = await findCustomer(email);
   await transaction(async (tx) => {
-    await run(
-      `INSERT INTO sign_in_codes (id, customer_id, browser_hash, code_hmac, created_at, expires_at)
-       VALUES (?, ?, ?, ?, ?, ?)`,
-      [id, customer?.id ?? null, hashToken(token), codeHmac(id, code), now, expiresAt],
-      tx,
+    await SignInCode.create(
+      {
+        id,
+        customerId: customer?.id ?? null,
+        browserHash: hashToken(token),
+        codeHmac: codeHmac(id, code),
+        createdAt: now,
+        expiresAt,
+      },
+      { transaction: tx },
     );
     const mail = { template: 'sign-in-code', data: { code } } as const;
     await queueMail(tx, { ...mail, to: customer?.email ?? null, notAfter: expiresAt }, { now });

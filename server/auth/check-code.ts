@@ -1,21 +1,13 @@
 import { timingSafeEqual } from 'node:crypto';
 import { Invalid } from '#domain/errors.ts';
-import { run, select, transaction } from '../db/sql.ts';
+import { SignInCode } from '../db/models/sign-in-code.ts';
+import { transaction } from '../db/sql.ts';
 import { countTry } from './code-limits.ts';
 import { codeHmac } from './code-hmac.ts';
 import { hashToken } from './token.ts';
 
 /** Tries a code allows. */
 export const MOST_TRIES = 5;
-
-interface Row {
-  id: string;
-  customer_id: string | null;
-  code_hmac: Buffer;
-  tries: number;
-  expires_at: Date;
-  used_at: Date | null;
-}
 
 const RUN_OUT = 'This code has run out. Send a new one.';
 const TRIED_OUT = 'This code was typed wrong five times and works no more. Send a new one.';
@@ -38,22 +30,21 @@ export async function checkCode(
   await countTry(ip);
   // The outcome is returned, not thrown, so that the try is counted whatever it was.
   const outcome = await transaction(async (tx) => {
-    const [row] = await select<Row>(
-      `SELECT id, customer_id, code_hmac, tries, expires_at, used_at
-       FROM sign_in_codes WHERE browser_hash = ? FOR UPDATE`,
-      [hashToken(token)],
-      tx,
-    );
-    if (row === undefined || row.used_at !== null || row.expires_at <= now) return over(RUN_OUT);
-    if (row.tries >= MOST_TRIES) return over(TRIED_OUT);
-    const right = timingSafeEqual(row.code_hmac, codeHmac(row.id, code));
+    const asked = await SignInCode.findOne({
+      where: { browserHash: hashToken(token) },
+      lock: true,
+      transaction: tx,
+    });
+    if (asked === null || asked.usedAt !== null || asked.expiresAt <= now) return over(RUN_OUT);
+    if (asked.tries >= MOST_TRIES) return over(TRIED_OUT);
+    const right = timingSafeEqual(asked.codeHmac, codeHmac(asked.id, code));
     // Nobody's address has a row too, and its code is never right.
-    if (!right || row.customer_id === null) {
-      await run('UPDATE sign_in_codes SET tries = tries + 1 WHERE id = ?', [row.id], tx);
-      return row.tries + 1 >= MOST_TRIES ? over(TRIED_OUT) : wrong(WRONG);
+    if (!right || asked.customerId === null) {
+      await asked.update({ tries: asked.tries + 1 }, { transaction: tx });
+      return asked.tries >= MOST_TRIES ? over(TRIED_OUT) : wrong(WRONG);
     }
-    await run('UPDATE sign_in_codes SET used_at = ? WHERE id = ?', [now, row.id], tx);
-    return row.customer_id;
+    await asked.update({ usedAt: now }, { transaction: tx });
+    return asked.customerId;
   });
   if (typeof outcome !== 'string') throw outcome;
   return outcome;

@@ -1,5 +1,6 @@
 import { recordAct } from '../audit/record-act.ts';
-import { run, transaction } from '../db/sql.ts';
+import { Session } from '../db/models/session.ts';
+import { transaction } from '../db/sql.ts';
 import { sessionCookie } from './cookies.ts';
 import { CUSTOMER_MS, STAFF_IDLE_MS } from './session-length.ts';
 import { hashToken, newToken } from './token.ts';
@@ -22,20 +23,19 @@ export async function startSession(
   const staff = 'personId' in holder;
   await transaction(async (tx) => {
     if (typeof before === 'string') {
-      await run('DELETE FROM sessions WHERE id_hash = ?', [hashToken(before)], tx);
+      await Session.destroy({ where: { idHash: hashToken(before) }, transaction: tx });
     }
-    await run(
-      `INSERT INTO sessions (id_hash, person_id, customer_id, created_at, fresh_at, seen_at, expires_at)
-       VALUES (:id, :person, :customer, :now, :fresh, :now, :until)`,
+    await Session.create(
       {
-        id: hashToken(id),
-        person: staff ? holder.personId : null,
-        customer: staff ? null : holder.customerId,
-        now,
-        fresh: staff ? holder.freshAt : now,
-        until: new Date(now.getTime() + (staff ? STAFF_IDLE_MS : CUSTOMER_MS)),
+        idHash: hashToken(id),
+        personId: staff ? holder.personId : null,
+        customerId: staff ? null : holder.customerId,
+        createdAt: now,
+        freshAt: staff ? holder.freshAt : now,
+        seenAt: now,
+        expiresAt: new Date(now.getTime() + (staff ? STAFF_IDLE_MS : CUSTOMER_MS)),
       },
-      tx,
+      { transaction: tx },
     );
     const actor = staff
       ? ({ kind: 'staff', personId: holder.personId } as const)

@@ -1,5 +1,5 @@
 import { Problem } from '#domain/errors.ts';
-import { run } from '../db/sql.ts';
+import { Outbox } from '../db/models/outbox.ts';
 import { backOff, MOST_ATTEMPTS } from './back-off.ts';
 import { GiveUp, type Job } from './job.ts';
 
@@ -15,9 +15,9 @@ function codeOf(error: unknown): string {
 
 /** Marks a job done. Its payload may hold an address or a code, and nobody needs it any more. */
 export async function settleDone({ id }: Job, { now = new Date() } = {}): Promise<void> {
-  await run(
-    "UPDATE outbox SET done_at = ?, claimed_until = NULL, last_error = NULL, payload = '{}' WHERE id = ?",
-    [now, id],
+  await Outbox.update(
+    { doneAt: now, claimedUntil: null, lastError: null, payload: '{}' },
+    { where: { id } },
   );
 }
 
@@ -28,15 +28,14 @@ export async function settleFailed(
   { now = new Date() } = {},
 ): Promise<boolean> {
   const over = error instanceof GiveUp || attempts >= MOST_ATTEMPTS;
-  await run(
-    `UPDATE outbox SET claimed_until = NULL, last_error = :code, failed_at = :failedAt, due_at = :dueAt
-     WHERE id = :id`,
+  await Outbox.update(
     {
-      id,
-      code: codeOf(error),
+      claimedUntil: null,
+      lastError: codeOf(error),
       failedAt: over ? now : null,
       dueAt: new Date(now.getTime() + backOff(attempts)),
     },
+    { where: { id } },
   );
   return over;
 }

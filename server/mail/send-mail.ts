@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { env } from '../env.ts';
+import { newestCheckpoint } from '../evidence/newest-checkpoint.ts';
 import { GiveUp } from '../jobs/job.ts';
 import { MailAddressSchema } from './address.ts';
 import { letterHtml, letterText } from './letter.ts';
@@ -22,6 +23,15 @@ function isAddressRefused(error: unknown): boolean {
   return code === 'EENVELOPE' && responseCode !== undefined && responseCode >= 500;
 }
 
+// A file, never text in the mail: a signed note is for programs, and people skip what they cannot read.
+const checkpointFile = (note: string) => ({
+  filename: 'checkpoint.txt',
+  content: note,
+  contentType: 'text/plain; charset=utf-8',
+  // Its bytes are signed; no mail program on the way may turn a line end.
+  contentTransferEncoding: 'base64' as const,
+});
+
 /** Sends one queued mail, with the newest checkpoint of the witness log as a file. */
 export async function sendMail(payload: unknown, { now = new Date() } = {}): Promise<void> {
   const parsed = PayloadSchema.safeParse(payload);
@@ -31,6 +41,7 @@ export async function sendMail(payload: unknown, { now = new Date() } = {}): Pro
   const { MAIL_FROM, PUBLIC_URL } = env();
   const letter = letterOf(parsed.data);
   const sender = await readSender();
+  const checkpoint = await newestCheckpoint();
   const transport = mailTransport();
   try {
     await transport.sendMail({
@@ -41,6 +52,7 @@ export async function sendMail(payload: unknown, { now = new Date() } = {}): Pro
       text: letterText(letter, sender, PUBLIC_URL),
       html: letterHtml(letter, sender, PUBLIC_URL),
       headers: { 'Auto-Submitted': 'auto-generated' },
+      attachments: checkpoint === null ? [] : [checkpointFile(checkpoint)],
     });
   } catch (error) {
     throw isAddressRefused(error) ? new GiveUp('address-refused') : error;
