@@ -290,3 +290,16 @@ export interface CheckRowView {
   note?: string;
   noteCode?: string;
 }
+
+/** A photo in the viewer, with what is known about it. */
+export interface ViewerPhotoView extends PhotoView {
+  phase: Phase;
+  /** "Tue 31 March, 09:31" */
+  when: string;
+  /** "Tomasz Rell, workshop phone" */
+  takenBy?: string;
+  /** 64 hex digits of the original. */
+  sha256?: string;
+  /** "Sealed 31 March, 09:58, by Tomasz Rell", or why it is not. */
+  seal: { state: SealView['state']; lead: string; text?: string };
+}

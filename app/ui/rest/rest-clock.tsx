@@ -1,12 +1,6 @@
 import type { RestTimeView, RestView } from '../types.ts';
 import { RestRule } from './rest-rule.tsx';
 
-const passedWord: Record<RestTimeView['name'], string> = {
-  'Clamps off': 'off',
-  'May be worked': 'may be worked',
-  'May carry strings': 'may carry strings',
-};
-
 /** Share of the rule's length that one label needs. */
 const ROOM = 0.24;
 
@@ -29,6 +23,12 @@ function endsThatFit(rest: RestView): { hour: number; text: string; left?: strin
   ];
 }
 
+/** "Thu 09:40"; once passed "Thu 09:40, off", "since Thu 09:40". */
+function timeWords({ name, when, state }: RestTimeView): string {
+  if (state !== 'passed') return when;
+  return name === 'Clamps off' ? `${when}, off` : `since ${when}`;
+}
+
 /** A rest with its up to three times: the next in a sentence, the rule, all of them in words. */
 export function RestClock({ rest }: { rest: RestView }) {
   return (
@@ -49,10 +49,7 @@ export function RestClock({ rest }: { rest: RestView }) {
         {rest.times.map((time) => (
           <div key={time.name} className={time.state === 'next' ? 'rest-next' : undefined}>
             <dt>{time.name}</dt>
-            <dd>
-              {time.when}
-              {time.state === 'passed' && `, ${passedWord[time.name]}`}
-            </dd>
+            <dd>{timeWords(time)}</dd>
           </div>
         ))}
       </dl>

@@ -17,7 +17,7 @@ export function SignInFrame({ title, children, other }: Props) {
     <div className="sign-in-page">
       <img className="sign-in-picture" src={pictureUrl} width={720} height={900} alt="" />
       <main className="sign-in">
-        <Wordmark height={46} />
+        <Wordmark height={40} />
         <h1>{title}</h1>
         {children}
         <div className="sign-in-others">
