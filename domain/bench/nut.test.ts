@@ -66,7 +66,9 @@ describe('slot height', () => {
   });
 
   it('says fill and recut below the frets, deepen when high, nothing within the target', () => {
-    expect(() => slotClearance(-0.1)).toThrow('Slot below the fret plane: it will buzz, fill and recut.');
+    expect(() => slotClearance(-0.1)).toThrow(
+      'Slot below the fret plane: it will buzz, fill and recut.',
+    );
     expect(slotClearance(0.5).warnings).toMatchObject([{ code: 'slot-high' }]);
     expect(clearanceWarnings(0.01)).toMatchObject([{ code: 'slot-low' }]);
     expect(clearanceWarnings(0.02)).toEqual([]);
