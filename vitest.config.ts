@@ -10,7 +10,7 @@ export default defineConfig({
   test: {
     allowOnly: false,
     passWithNoTests: false,
-    testTimeout: 20_000,
+    testTimeout: 30_000,
     hookTimeout: 60_000,
     projects: [
       {

@@ -90,14 +90,13 @@ export async function installDebianPackages(packages, say) {
   const prefix = aptPrefix(missing, { uid: process.getuid?.() ?? -1, sudo: sudoWorks() });
   const environment = { ...process.env, DEBIAN_FRONTEND: 'noninteractive', LC_ALL: 'C.UTF-8' };
   const apt = (/** @type {string[]} */ ...words) =>
-    run(
-      [...prefix, 'apt-get', '-q', '-o', 'Acquire::Retries=2', ...words],
-      'Debian’s packages',
-      environment,
-    );
+    run([...prefix, 'apt-get', '-q', '-o', 'Acquire::Retries=2', ...words], environment);
   say(`Installing Debian packages: ${missing.join(' ')}`);
-  await apt('update');
-  await apt('install', '-y', '--no-install-recommends', ...missing);
+  // A list that cannot be fetched need not matter; whether the packages can is seen next.
+  const update = await apt('update');
+  const install = await apt('install', '-y', '--no-install-recommends', ...missing);
+  if (install.status !== 0)
+    throw failure('apt-get install', install, `Debian’s packages`, update.output);
 }
 
 /**
@@ -126,18 +125,31 @@ export function npmPackagesMatch(root) {
 export async function installNpmPackages(root, say) {
   if (npmPackagesMatch(root)) return;
   say('Installing npm packages (about a minute)');
-  await run(['npm', 'ci', '--no-progress'], 'The npm packages', process.env, root);
+  const install = await run(['npm', 'ci', '--no-progress'], process.env, root);
+  if (install.status !== 0) throw failure('npm ci', install, 'The npm packages');
 }
 
 /**
- * Runs a program to its end and throws a sentence when it fails.
+ * @param {string} command what was run
+ * @param {{ status: number | null, output: string }} ended
+ * @param {string} what what it was to fetch, as the subject of a sentence
+ * @param {string} [before] what an earlier step printed that may be the reason
+ */
+function failure(command, { status, output }, what, before = '') {
+  if (status === null) return new Failure('Stopped.');
+  const lastLines = output.trim().split('\n').slice(-15).join('\n');
+  const sentence = sentenceForOutput(before + output, what);
+  return new Failure(sentence ?? `${command} failed. It said:\n${lastLines}`);
+}
+
+/**
+ * Runs a program to its end; a signal to this process reaches it too.
  * @param {string[]} words
- * @param {string} what what it fetches, as the subject of the sentence
  * @param {NodeJS.ProcessEnv} env
  * @param {string} [cwd]
- * @returns {Promise<void>}
+ * @returns {Promise<{ status: number | null, output: string }>} status is null when a signal ended it
  */
-function run(words, what, env, cwd) {
+function run(words, env, cwd) {
   const [program = '', ...rest] = words;
   return new Promise((resolve, reject) => {
     const child = spawn(program, rest, { env, cwd, stdio: ['inherit', 'pipe', 'pipe'] });
@@ -147,14 +159,13 @@ function run(words, what, env, cwd) {
     child.stderr.on('data', keep);
     const stop = () => child.kill('SIGTERM');
     process.once('SIGTERM', stop);
+    // Ctrl-C reaches it by itself; this process only has to outlive it.
+    process.once('SIGINT', stop);
     child.on('error', reject);
-    child.on('close', (status, signal) => {
+    child.on('close', (status) => {
       process.off('SIGTERM', stop);
-      if (status === 0) return resolve();
-      if (signal) return reject(new Failure('Stopped.'));
-      const lastLines = output.trim().split('\n').slice(-15).join('\n');
-      const sentence = sentenceForOutput(output, what);
-      reject(new Failure(sentence ?? `${words.join(' ')} failed. It said:\n${lastLines}`));
+      process.off('SIGINT', stop);
+      resolve({ status, output });
     });
   });
 }

@@ -6,7 +6,8 @@
 /** An error whose message is already the sentence for a person; no stack is shown for it. */
 export class Failure extends Error {}
 
-const diskFull = /ENOSPC|No space left on device|Errcode: 28\b|error(?: number)? 28\b/;
+const diskFull =
+  /ENOSPC|No space left on device|enough free space|Errcode: 28\b|error(?: number)? 28\b/;
 const noNetwork =
   /EAI_AGAIN|ENOTFOUND|ENETUNREACH|EHOSTUNREACH|ETIMEDOUT|ECONNREFUSED|ECONNRESET|Temporary failure resolving|Could not resolve|Could not connect|Failed to fetch|Unable to fetch/;
 

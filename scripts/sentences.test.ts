@@ -1,0 +1,57 @@
+import { describe, expect, it } from 'vitest';
+import { Failure, portInUseSentence, sentenceFor, sentenceForOutput } from './sentences.mjs';
+
+const full = 'The disk is full. Free about 1 GB, then run the same command again.';
+const noNetwork =
+  'The npm packages could not be fetched. Check the network, then run the same command again.';
+
+// Lines as npm 11, apt 2.6 and MariaDB 10.11 print them.
+describe('sentenceForOutput', () => {
+  it.each([
+    ['npm error code ENOSPC\nnpm error syscall write', full],
+    ["E: You don't have enough free space in /var/cache/apt/archives/.", full],
+    ['dpkg: error: failed to write status: No space left on device', full],
+    [
+      '[ERROR] mariadbd: Error writing file \'./ddl_recovery.log\' (Errcode: 28 "No space left")',
+      full,
+    ],
+    [
+      '[Warning] InnoDB: Retry attempts for writing partial data failed.\n[ERROR] InnoDB: error number 28',
+      full,
+    ],
+    ['npm error code EAI_AGAIN\nnpm error network request failed', noNetwork],
+    [
+      "W: Failed to fetch http://a.example/InRelease  Temporary failure resolving 'a.example'",
+      noNetwork,
+    ],
+    ['E: Unable to fetch some archives, maybe run apt-get update', noNetwork],
+    ['npm error code EINTEGRITY', undefined],
+    ['error 282 in line 28', undefined],
+  ])('%s', (output, sentence) => {
+    expect(sentenceForOutput(output, 'The npm packages')).toBe(sentence);
+  });
+});
+
+describe('sentenceFor', () => {
+  const failed = (code: string, path?: string) =>
+    Object.assign(new Error(`${code}: it failed`), { code, path });
+
+  it('puts errors of the machine into words', () => {
+    expect(sentenceFor(failed('ENOSPC'))).toBe(full);
+    expect(sentenceFor(failed('EACCES', '/srv/.data'))).toBe(
+      '/srv/.data cannot be written. Give this user the right to write there, or run as the user who owns it.',
+    );
+  });
+
+  it('leaves sentences and unknown errors as they are', () => {
+    expect(sentenceFor(new Failure('The glue pot is cold.'))).toBe('The glue pot is cold.');
+    expect(sentenceFor(new Error('something else'))).toBe('something else');
+    expect(sentenceFor('words')).toBe('words');
+  });
+});
+
+it('names the port, who wants it and how to choose another', () => {
+  expect(portInUseSentence(3000, 'Witnessmark', 'PORT')).toBe(
+    'Witnessmark needs port 3000, which another program is using. Stop that program, or choose another port: PORT=3010 npm start',
+  );
+});
