@@ -10,4 +10,6 @@ export default [
   route('sign-out', 'routes/account/sign-out.ts'),
   route('api/health', 'routes/api/health.ts'),
   route('api/changes', 'routes/api/changes.ts'),
+  route('api/cases/:number/photos/:photoId', 'routes/api/photos.ts'),
+  route('api/media/:photoId/:size', 'routes/api/media.ts'),
 ] satisfies RouteConfig;
