@@ -1,16 +1,22 @@
 import type { ReactNode } from 'react';
-import { Links, Meta, Outlet, Scripts, ScrollRestoration } from 'react-router';
+import { Links, Meta, Outlet, Scripts, ScrollRestoration, useRouteLoaderData } from 'react-router';
 import type { Route } from './+types/root';
 import './app.css';
 import { guard } from './guard.ts';
 import { ErrorPage } from './lib/error-page.tsx';
+import { themeOf } from './lib/theme.ts';
 
 export const middleware: Route.MiddlewareFunction[] = [guard];
 
+export function loader({ request }: Route.LoaderArgs) {
+  return { theme: themeOf(request.headers.get('Cookie')) };
+}
+
 /** The document around every page, and around the error page too. */
 export function Layout({ children }: { children: ReactNode }) {
+  const theme = useRouteLoaderData<typeof loader>('root')?.theme ?? undefined;
   return (
-    <html lang="en-GB">
+    <html lang="en-GB" data-theme={theme}>
       <head>
         <meta charSet="utf-8" />
         <meta name="viewport" content="width=device-width, initial-scale=1, viewport-fit=cover" />
