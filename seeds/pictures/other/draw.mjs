@@ -18,11 +18,11 @@ const pictures = {
   cello: {
     cloth: 'slate',
     angle: 9,
-    scale: 1.4,
-    y: 110,
+    scale: 1.26,
+    y: 70,
     draw: bowed('#8c3f1b', '#4c1c0a', { cello: true }),
   },
-  violin: { cloth: 'ink', angle: -16, scale: 1.36, y: 80, draw: bowed('#c9792e', '#7a3510', {}) },
+  violin: { cloth: 'ink', angle: -16, scale: 1.26, y: 70, draw: bowed('#c9792e', '#7a3510', {}) },
   'violin-small': {
     cloth: 'paper',
     angle: 14,
@@ -33,7 +33,7 @@ const pictures = {
   viola: {
     cloth: 'felt',
     angle: -8,
-    scale: 1.44,
+    scale: 1.3,
     y: 90,
     draw: bowed('#9c5524', '#54240d', { wide: 1.07 }),
   },
