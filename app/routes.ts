@@ -1,4 +1,4 @@
-import { index, route, type RouteConfig } from '@react-router/dev/routes';
+import { index, layout, route, type RouteConfig } from '@react-router/dev/routes';
 
 /** Every page and resource route. Each pattern has its row in app/access.ts. */
 export default [
@@ -8,6 +8,18 @@ export default [
   route('sign-in/staff', 'routes/account/staff.tsx'),
   route('sign-in/callback', 'routes/account/callback.tsx'),
   route('sign-out', 'routes/account/sign-out.ts'),
+  layout('routes/bench/layout.tsx', [
+    route('bench', 'routes/bench/rack.tsx'),
+    route('bench/find', 'routes/bench/find.tsx'),
+    route('bench/take-in', 'routes/bench/take-in.tsx'),
+    route('bench/cases/:number', 'routes/bench/case.tsx'),
+    route('bench/cases/:number/close', 'routes/bench/close.tsx'),
+  ]),
+  layout('routes/portal/layout.tsx', [
+    route('portal', 'routes/portal/home.tsx'),
+    route('portal/cases/:number', 'routes/portal/case.tsx'),
+    route('portal/cases/:number/timeline', 'routes/portal/timeline.tsx'),
+  ]),
   route('api/health', 'routes/api/health.ts'),
   route('api/changes', 'routes/api/changes.ts'),
   route('api/cases/:number/photos/:photoId', 'routes/api/photos.ts'),

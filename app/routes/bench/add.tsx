@@ -1,0 +1,161 @@
+import { useRef, useState } from 'react';
+import { Form, Link, redirect, useSearchParams } from 'react-router';
+import { v7 } from 'uuid';
+import type { Route } from './+types/add';
+import { viewerContext } from '#app/context.ts';
+import { fieldsOf } from '#app/lib/field-of.ts';
+import { refuse } from '#app/lib/problem.ts';
+import { retry } from '#app/lib/retry.ts';
+import { AddHead } from '#app/ui/add/add-head.tsx';
+import { AddSheet } from '#app/ui/add/add-sheet.tsx';
+import { PhotoStrip } from '#app/ui/add/photo-strip.tsx';
+import { Button } from '#app/ui/control/button.tsx';
+import { useFirstWrongField } from '#app/ui/control/use-first-wrong-field.ts';
+import { Icon } from '#app/ui/icon.tsx';
+import { Notice } from '#app/ui/notice.tsx';
+import type { GoingUpView } from '#app/ui/types.ts';
+import { PhotoDrop } from '#app/ui/uploads/photo-drop.tsx';
+import { phaseSuggested } from '#domain/phase-suggested.ts';
+import { may } from '#domain/rights.ts';
+import { getCase } from '#server/cases/get-case.ts';
+import { addEntry } from '#server/entries/add-entry.ts';
+import { listTimeline } from '#server/entries/list-timeline.ts';
+import { readShop } from '#server/shop/read-shop.ts';
+import { EntryForm } from './entry-form.tsx';
+import { entryInput } from './entry-input.ts';
+import type { BenchHandle } from './layout.tsx';
+import { openTiles } from './open-tiles.ts';
+import { PhotoWords } from './photo-words.tsx';
+
+export const handle: BenchHandle = { bar: 'none' };
+
+/** The entry's id is made here once: photos go up under it before there is an entry. */
+export const shouldRevalidate = () => false;
+
+export async function loader({ context, params: { number } }: Route.LoaderArgs) {
+  const viewer = context.get(viewerContext);
+  const now = new Date();
+  const [file, timeline, { timeZone: zone }] = await Promise.all([
+    getCase(viewer, { number }, { now }),
+    listTimeline(viewer, { caseNumber: number }),
+    readShop(),
+  ]).catch(refuse);
+  return {
+    entryId: v7(),
+    number,
+    title: `${file.ordinal}, ${file.kind}`,
+    sub: `${file.maker}, ${file.owner}`,
+    isClosed: file.closedAt !== null,
+    phase: phaseSuggested({
+      state: file.state.state,
+      used: timeline.map(({ phase }) => phase),
+      authorised: file.estimate?.answer === 'authorised',
+    }),
+    deskOnly: !may(viewer, 'add entry'),
+    from: now.toISOString(),
+    zone,
+  };
+}
+
+export async function action({ context, params, request }: Route.ActionArgs) {
+  const form = await request.formData();
+  try {
+    const { entryId } = await addEntry(context.get(viewerContext), {
+      caseNumber: params.number,
+      entryId: String(form.get('entryId') ?? ''),
+      ...entryInput(form),
+    });
+    return redirect(`/bench/cases/${params.number}?added=${entryId}#entry-${entryId}`);
+  } catch (error) {
+    return retry(error, form);
+  }
+}
+
+export default function AddPage({ loaderData, actionData }: Route.ComponentProps) {
+  const { number, title, sub, phase, deskOnly, from, zone } = loaderData;
+  const [entryId] = useState(actionData?.values.entryId ?? loaderData.entryId);
+  const [photos, setPhotos] = useState<GoingUpView[]>([]);
+  const [search] = useSearchParams();
+  const form = useRef<HTMLFormElement>(null);
+  useFirstWrongField(form, actionData);
+  const what = search.get('step') === 'what' || actionData !== undefined;
+  const here = `/bench/cases/${number}`;
+  const field = fieldsOf(actionData);
+  const named = photos
+    .filter(({ state, final }) => state !== 'failed' || !final)
+    .map(({ id, name, thumb }) => ({
+      ...{ id, name, caption: '', bench: false, linked: false },
+      thumb: thumb ?? null,
+    }));
+  return (
+    <AddSheet>
+      <title>{`Add to timeline, ${number} · Witnessmark`}</title>
+      <AddHead
+        title={what ? 'What it shows' : title}
+        sub={what ? title : sub}
+        back={
+          <Link
+            to={what ? `${here}/add` : here}
+            replace={what}
+            preventScrollReset={!what}
+            aria-label={what ? 'Back to the photos' : 'Close'}
+          >
+            <Icon name={what ? 'left' : 'close'} size={24} />
+          </Link>
+        }
+      />
+      {loaderData.isClosed && (
+        <Notice tone="failed" lead="The case is closed." className="m-3.5">
+          Nothing is added to it any more. Add a correction beside the entry it corrects.
+        </Notice>
+      )}
+      <div className={`add-step ${what ? 'max-phone:hidden' : ''}`}>
+        <PhotoDrop caseNumber={number} entryId={entryId} onPhotos={setPhotos} />
+        <p className="p-3.5 phone:hidden">
+          <Link
+            className="btn btn-primary btn-big w-full"
+            to="?step=what"
+            replace
+            preventScrollReset={false}
+          >
+            What it shows
+          </Link>
+        </p>
+      </div>
+      <Form
+        method="post"
+        ref={form}
+        noValidate
+        className={`flex flex-1 flex-col ${what ? '' : 'max-phone:hidden'}`}
+      >
+        <input type="hidden" name="entryId" value={entryId} />
+        {photos.length > 0 && (
+          <div className="phone:hidden">
+            <PhotoStrip photos={photos} />
+          </div>
+        )}
+        <div className="grid gap-4 p-3.5">
+          {actionData && (
+            <Notice tone="failed" lead={actionData.problem} alert>
+              Nothing is lost: mend it and add it again.
+            </Notice>
+          )}
+          <EntryForm
+            field={(name, preset) => field(name, name === 'phase' ? phase : preset)}
+            open={openTiles(actionData?.values ?? {})}
+            deskOnly={deskOnly}
+            from={from}
+            zone={zone}
+          >
+            <PhotoWords photos={named} field={field} />
+          </EntryForm>
+        </div>
+        <div className="add-foot">
+          <Button kind="primary" size="big" wide>
+            Add to timeline
+          </Button>
+        </div>
+      </Form>
+    </AddSheet>
+  );
+}
