@@ -13,13 +13,13 @@ export const damaged = () =>
   });
 
 /**
- * What a walk asks for next: `take` that many bytes together (nothing, at the very end, with
- * `orEnd`), `pass` over that many while `see` looks at the pieces, or skip up to and over the next
- * byte 0xff.
+ * What a walk asks for next: `take` that many bytes together (with `orEnd`: or none, at the very
+ * end), `pass` over that many (with `orEnd`: or what there is) while `see` looks at the pieces, or
+ * skip up to and over the next byte 0xff.
  */
 export type Want =
   | { take: number; orEnd?: true }
-  | { pass: number; see?: (piece: Uint8Array) => void }
+  | { pass: number; orEnd?: true; see?: (piece: Uint8Array) => void }
   | 'to next ff';
 
 /** A walk through a file's structure, written as if the whole file were there. Returns at the picture's end. */
@@ -50,7 +50,7 @@ export class Feed {
   end(): void {
     const want = this.#want;
     if (want === undefined) return;
-    const mayEnd = typeof want === 'object' && 'take' in want && want.orEnd === true;
+    const mayEnd = want !== 'to next ff' && want.orEnd === true;
     if (!mayEnd || this.#heldLength > 0) throw truncated();
     this.#resume(this.#walk.next(NOTHING));
   }

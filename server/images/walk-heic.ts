@@ -19,9 +19,10 @@ export function* walkHeic(size: SizeSeen): Walk {
     if (head.length === 0) break;
     const type = String.fromCharCode(...head.subarray(4));
     let length = view(head).getUint32(0) - 8;
-    if (length === 1 - 8) length = Number(view(yield { take: 8 }).getBigUint64(0)) - 16;
     // A last box without length reaches to the end of the file.
-    else if (length === 0 - 8) length = Number.MAX_SAFE_INTEGER;
+    const isOpen = length === 0 - 8;
+    if (isOpen) length = Number.MAX_SAFE_INTEGER;
+    else if (length === 1 - 8) length = Number(view(yield { take: 8 }).getBigUint64(0)) - 16;
     if (length < 0) throw damaged();
 
     if (type === 'mdat') hasData = true;
@@ -33,7 +34,7 @@ export function* walkHeic(size: SizeSeen): Walk {
       if (largest === undefined) throw damaged();
       size(largest.width, largest.height);
     } else if (length > 0) {
-      yield { pass: length };
+      yield isOpen ? { pass: length, orEnd: true } : { pass: length };
     }
   }
   if (!hasMeta || !hasData) throw damaged();

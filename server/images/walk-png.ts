@@ -15,15 +15,18 @@ export function* walkPng(size: SizeSeen): Walk {
     if (length > 0x7fffffff || first !== (type === 'IHDR')) throw damaged();
 
     let crc = crc32(head.subarray(4));
+    const sides: number[] = [];
     if (type === 'IHDR') {
       if (length !== 13) throw damaged();
       const body = yield { take: 13 };
       crc = crc32(body, crc);
-      size(view(body).getUint32(0), view(body).getUint32(4));
+      sides.push(view(body).getUint32(0), view(body).getUint32(4));
     } else if (length > 0) {
       yield { pass: length, see: (piece) => (crc = crc32(piece, crc)) };
     }
     if (view(yield { take: 4 }).getUint32(0) !== crc) throw damaged();
+    const [width, height] = sides;
+    if (width !== undefined && height !== undefined) size(width, height);
     if (type === 'IDAT') data += length;
     if (type === 'IEND') break;
   }

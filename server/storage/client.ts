@@ -2,6 +2,9 @@ import { CreateBucketCommand, HeadBucketCommand, S3Client } from '@aws-sdk/clien
 import { env } from '#server/env.ts';
 import { callStore } from './call-store.ts';
 
+// What fails is logged where it is caught, once.
+const silent = { debug() {}, info() {}, warn() {}, error() {} };
+
 let client: S3Client | undefined;
 let opened: Promise<void> | undefined;
 
@@ -20,6 +23,7 @@ export function storeClient(): S3Client {
     requestChecksumCalculation: 'WHEN_REQUIRED',
     responseChecksumValidation: 'WHEN_REQUIRED',
     maxAttempts: 2,
+    logger: silent,
     requestHandler: {
       connectionTimeout: 3_000,
       // A reader may be slower than the store is silent.
