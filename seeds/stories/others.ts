@@ -130,7 +130,7 @@ export function atWork(
       job: 'Bridge leans, one peg slips',
       text: 'The bridge leans towards the fingerboard and the A peg will not hold.',
       nextStep: 'Look over, write estimate',
-      picture: 'violin',
+      picture: 'violin-small',
     }),
   ];
 }
@@ -223,6 +223,7 @@ export function readyToGoHome(
       text: 'Pegs stick and slip by turns with the weather; the holes are worn out of round.',
       nextStep: 'Fit the pegs',
       promisedOn: dayAhead(1),
+      picture: 'violin',
     })
       .entry(
         workday(5, '10:20'),
