@@ -1,12 +1,14 @@
 import { v7 } from 'uuid';
 import { afterEach, describe, expect, it } from 'vitest';
-import { Unavailable } from '#domain/errors.ts';
+import { NotAllowed, Unavailable } from '#domain/errors.ts';
+import { PUBLIC, type Viewer } from '#domain/viewer.ts';
 import { useDatabase } from '#tests/setup/database.ts';
 import { run, select, transaction } from '../db/sql.ts';
 import { backOff, MOST_ATTEMPTS } from './back-off.ts';
 import { CLAIM_MS, claimJobs, renewClaim } from './claim-jobs.ts';
 import { doJob } from './do-job.ts';
 import { GiveUp } from './job.ts';
+import { listTrouble } from './list-trouble.ts';
 import { queueJob, type NewJob } from './queue-job.ts';
 import { settleDone } from './settle-job.ts';
 
@@ -91,6 +93,15 @@ describe('a job', () => {
   });
 });
 
+const staff: Viewer = {
+  kind: 'staff',
+  personId: v7(),
+  role: 'desk',
+  name: 'Ines Lund',
+  number: 1,
+  freshAt: AT,
+};
+
 describe('a job that fails', () => {
   async function fail(error: unknown, attempt = 1) {
     await run('UPDATE outbox SET attempts = ?, due_at = ?', [attempt - 1, AT]);
@@ -153,5 +164,27 @@ describe('a job that fails', () => {
     if (job === undefined) throw new Error('nothing was claimed');
     expect(await doJob(job, { now: AT })).toBe(false);
     expect(await row()).toMatchObject({ last_error: 'no-handler', failed_at: AT });
+  });
+
+  it('is listed for the people of the shop, in words, until it is done', async () => {
+    await queue();
+    expect(await listTrouble(staff, { number: null })).toEqual([]);
+    await fail(Object.assign(new Error('x'), { code: 'ESOCKET' }));
+    const since = AT;
+    expect(await listTrouble(staff, { number: null })).toEqual([
+      {
+        sentence: 'A task has not been done yet: ESOCKET. It is tried again by itself.',
+        since,
+        givenUp: false,
+      },
+    ]);
+    expect(await listTrouble(staff, { number: '2026-031' })).toEqual([]);
+    await fail(new GiveUp('bad-address'));
+    expect((await listTrouble(staff, { number: null }))[0]?.givenUp).toBe(true);
+    await run('UPDATE outbox SET done_at = ?', [AT]);
+    expect(await listTrouble(staff, { number: null })).toEqual([]);
+    for (const viewer of [PUBLIC, { kind: 'customer', customerId: v7(), name: 'C' } as const]) {
+      await expect(listTrouble(viewer, { number: null })).rejects.toThrow(NotAllowed);
+    }
   });
 });
