@@ -64,7 +64,7 @@ export async function getCase(
 ): Promise<CaseFile> {
   demand(viewer, 'see cases');
   const parsed = parseCaseNumber(number);
-  if (!parsed) throw new NotFound('No case has this number. Numbers look like 2026-031.');
+  if (!parsed) throw new NotFound('No case has this number. Check it on the tag.');
   const scope = caseScope(viewer);
   const [row] = await select<Row>(
     `SELECT ${COLUMNS}

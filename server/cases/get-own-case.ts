@@ -14,6 +14,6 @@ export async function getOwnCase(
 ): Promise<OwnCase> {
   const parsed = parseCaseNumber(number);
   const [own] = parsed ? await readOwnCases(viewer, parsed, { now }) : [];
-  if (!own) throw new NotFound('You have no case with this number. Check it on your receipt.');
+  if (!own) throw new NotFound('No case has this number. Check it on the tag.');
   return own;
 }
