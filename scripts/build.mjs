@@ -9,7 +9,13 @@ import { join } from 'node:path';
 import { Failure, sentenceForOutput } from './sentences.mjs';
 
 const sources = ['app', 'domain', 'evidence', 'server', 'public'];
-const settings = ['package-lock.json', 'react-router.config.ts', 'vite.config.ts', 'tsconfig.json'];
+const settings = [
+  'package-lock.json',
+  'scripts/precompress.ts',
+  'react-router.config.ts',
+  'vite.config.ts',
+  'tsconfig.json',
+];
 const mark = 'build/sources.sha256';
 
 /**
