@@ -10,10 +10,8 @@ import { appendEntry } from './append-entry.ts';
 import { noteDemoKeys, refuseDemoKeysInPublic } from './demo-keys.ts';
 import { keyIdsOnDisk, makeKeyFile, readKeyFile, type KeyFile, type KeyUse } from './key-files.ts';
 import { lockHead } from './log-state.ts';
+import { OWN_CHAIN } from './own-chain.ts';
 import { paperCertificate } from './paper-certificate.ts';
-
-/** The log's own chain: a case id of sixteen zero bytes. */
-export const OWN_CHAIN = Buffer.alloc(16);
 
 const appendOwn = (tx: Transaction, kind: 'log-start' | 'key', shown: object, now: Date) =>
   appendEntry(tx, {
