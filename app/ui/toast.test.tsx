@@ -1,7 +1,6 @@
 // @vitest-environment happy-dom
-import { act } from 'react';
 import { afterEach, beforeEach, expect, it, vi } from 'vitest';
-import { fire, mount } from '#tests/helpers/mount.tsx';
+import { fire, mount, settled } from '#tests/helpers/mount.tsx';
 import { Toast } from './toast.tsx';
 
 beforeEach(() => {
@@ -11,7 +10,7 @@ afterEach(() => {
   vi.useRealTimers();
 });
 
-const pass = (ms: number) => act(async () => vi.advanceTimersByTime(ms));
+const pass = (ms: number) => settled(() => vi.advanceTimersByTime(ms));
 
 it('goes after eight seconds', async () => {
   const close = vi.fn();

@@ -9,16 +9,19 @@ export async function mount(children: ReactNode): Promise<HTMLElement> {
   document.body.append(place);
   const root = createRoot(place);
   onTestFinished(async () => {
-    await act(async () => root.unmount());
+    await settled(() => root.unmount());
     place.remove();
   });
-  await act(async () => root.render(children));
+  await settled(() => root.render(children));
   return place;
 }
 
 /** Fires a bubbling event and waits until React has answered it. */
 export async function fire(target: Element | null, event: Event): Promise<void> {
-  await act(async () => {
-    target?.dispatchEvent(event);
-  });
+  await settled(() => target?.dispatchEvent(event));
+}
+
+/** Does something and waits until React has drawn what follows from it. */
+export async function settled(change: () => unknown): Promise<void> {
+  await act(() => Promise.resolve(void change()));
 }
