@@ -135,7 +135,11 @@ describe('what is refused, and what was meant', () => {
   });
 
   it('takes a fraction without a unit for inches and asks', () => {
-    expect(refusal('5/64', 'action', MM).meant?.value).toBeCloseTo(1.984375, 9);
+    expect(refusal('5/64', 'action', MM).meant).toEqual({
+      value: 1.984375,
+      words: '5/64 in, which is 1.9844 mm',
+    });
+    expect(refusal('1/2', 'scale', MM).meant).toBeUndefined();
   });
 
   it('offers nothing when nothing fits', () => {

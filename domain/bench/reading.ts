@@ -34,14 +34,14 @@ export function readReading(text: string, id: FieldId, as: ReadAs): Reading {
   const unit = hasUnit ? unitOf(id, parsed.suffix, as.unit, typed) : as.unit;
   if (!parsed.ok) throw refused(id, parsed.code, typed, meantOf(id, parsed.meanings, unit, as));
   if (parsed.fraction && unit === 'mm') {
-    const value = convert(parsed.value, 'in', field.unit);
+    const inches = meantOf(id, [parsed.value], 'in', as);
     throw new BadReading({
       code: 'wrong-unit',
       field: id,
       sentence: `${field.label}: ${typed} is a fraction, and millimetres are written with decimals. Write in behind it for inches.`,
-      meant: {
-        value,
-        words: `${typed.replace(/\s*mm$/, '')} in, which is ${plainAmount(value, field.unit, as.decimal)}`,
+      meant: inches && {
+        value: inches.value,
+        words: `${typed.replace(/\s*mm$/, '')} in, which is ${plainAmount(inches.value, field.unit, as.decimal)}`,
       },
     });
   }
