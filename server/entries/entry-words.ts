@@ -14,7 +14,7 @@ export interface EntryWords extends Pick<
 
 /** Events have no words of their own but a sentence; their titles are fixed. */
 const EVENT_TITLES: Record<string, string> = {
-  authorisation: 'Estimate answered',
+  authorisation: 'Estimate authorised',
   close: 'Case closed',
   'handed-back': 'Handed back',
   warranty: 'Warranty issued',

@@ -82,15 +82,15 @@ function sealedAt(entry: TimelineEntry, at: Date, { zone }: Sight): string {
   return isSameDay(at, shown, zone) ? clock(at, zone) : `${dayTime(at, zone)},`;
 }
 
-/** What the line below an entry says of its seal. */
-export function sealView(entry: TimelineEntry, sight: Sight): SealView {
+/** What the line below an entry says of its seal; `alone`, away from the entry's date, it has its day too. */
+export function sealView(entry: TimelineEntry, sight: Sight, { alone = false } = {}): SealView {
   const { seal } = entry;
   if (seal === null) return { state: 'open', sentence: openSentence(entry) };
   return {
     state: 'sealed',
-    when: sealedAt(entry, seal.at, sight),
+    when: alone ? `${dayTime(seal.at, sight.zone)},` : sealedAt(entry, seal.at, sight),
     ...(seal.by === null ? { act: 'by the shop' } : { by: seal.by }),
-    shortHash: shortDigest(seal.leafHash),
+    shortHash: alone ? undefined : shortDigest(seal.leafHash),
   };
 }
 

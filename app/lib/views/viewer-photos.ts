@@ -18,7 +18,8 @@ export interface PhotoFacts {
 /** "2026-04-15 09:44", as the camera's clock gave it. */
 function takenWords({ takenAt, takenClock, receivedAt }: PhotoFacts, zone: string): string {
   if (takenAt) return dayTime(takenAt, zone);
-  if (takenClock) return `${takenClock.slice(0, 16)} by the camera’s clock, time zone unknown`;
+  if (takenClock)
+    return `${takenClock.slice(0, 16).replace('T', ' ')} by the camera’s clock, time zone unknown`;
   return `added ${dayTime(receivedAt, zone)}`;
 }
 

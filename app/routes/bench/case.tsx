@@ -1,5 +1,5 @@
 import { lazy, Suspense, useEffect } from 'react';
-import { useNavigate, useNavigationType, useSearchParams } from 'react-router';
+import { useLocation, useNavigate, useNavigationType, useSearchParams } from 'react-router';
 import type { Route } from './+types/case';
 import { viewerContext } from '#app/context.ts';
 import { fieldsOf } from '#app/lib/field-of.ts';
@@ -46,9 +46,12 @@ export async function action({ context, params, request }: Route.ActionArgs) {
 /** An open case opens at its latest entry, unless the address or the way back says where. */
 function useLatestEntry(isOpen: boolean, latest: string | null): void {
   const type = useNavigationType();
+  const { key } = useLocation();
   useEffect(() => {
     const elsewhere = window.location.hash !== '' || window.location.search !== '';
-    if (!isOpen || latest === null || elsewhere || type === 'POP') return;
+    // The first page of a visit is a POP too, but has no place to go back to: its key is "default".
+    const isBack = type === 'POP' && key !== 'default';
+    if (!isOpen || latest === null || elsewhere || isBack) return;
     document.getElementById(`entry-${latest}`)?.scrollIntoView({ block: 'start' });
     // Only when the case is opened: news must not move a page that is being read.
     // eslint-disable-next-line react-hooks/exhaustive-deps

@@ -49,7 +49,7 @@ export function EntryActions({
       {acts.mayCorrect && (
         <Form method="post" className="entry-correct">
           <input type="hidden" name="entryId" value={entryId} />
-          <Button kind="text" name="intent" value="amend">
+          <Button kind="text" name="intent" value="amend" className="text-label font-normal">
             Add a correction
           </Button>
         </Form>

@@ -1,4 +1,4 @@
-import { calendarDate, dateOnly, day, isSameDay, shortDay, todayOr } from '#app/lib/format/date.ts';
+import { calendarDate, day, isSameDay, shortDay, todayOr } from '#app/lib/format/date.ts';
 import { moneyOf } from '#app/lib/views/money-of.ts';
 import { restNextView } from '#app/lib/format/rest.ts';
 import { thumbView } from '#app/lib/views/photo-view.ts';
@@ -74,7 +74,7 @@ function promisedWords(one: RackCase, { now, zone }: Sight): string {
     return one.state.state === 'owner' ? 'Promised on authorisation' : 'Promised not yet set';
   const promised = calendarDate(one.promisedOn, zone);
   return one.state.state === 'rest'
-    ? `Promised ${dateOnly(promised, zone)}`
+    ? `Promised ${shortDay(promised, zone).replace(/^\w+ /, '')}`
     : `Promised ${day(promised, zone)}`;
 }
 

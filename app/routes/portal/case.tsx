@@ -23,7 +23,10 @@ function latestPhoto(timeline: TimelineEntry[], sight: Sight) {
   if (!entry || !photo) return null;
   const view = photoView(photo, sight.photoHref?.(photo.n));
   const taken = shortDay(entry.occurredAt ?? entry.writtenAt, sight.zone);
-  return { photo: { ...view, caption: `${view.caption}, ${taken}` }, seal: sealView(entry, sight) };
+  return {
+    photo: { ...view, caption: `${view.caption}, ${taken}` },
+    seal: sealView(entry, sight, { alone: true }),
+  };
 }
 
 export async function loader({ context, params, url }: Route.LoaderArgs) {

@@ -20,7 +20,7 @@ export default function PortalLayout({ loaderData }: Route.ComponentProps) {
     <>
       <PortalBar home="/portal" shop={shop} town={town} />
       <Outlet />
-      <footer className="mx-auto grid max-w-[40rem] gap-3 px-4.5 pt-10 pb-28 text-label text-ink-2">
+      <footer className="mx-auto grid max-w-[40rem] gap-3 px-4.5 pb-28 text-label text-ink-2">
         <p>
           {shop}, {town}. {reach}.
         </p>

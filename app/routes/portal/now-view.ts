@@ -29,10 +29,14 @@ const RESTING: Record<RestTimeName, (when: string) => string> = {
   'may carry strings': (when) => `It rests. It may carry strings ${when}.`,
 };
 
-/** "on Thursday at 09:40", "today at 16:10" */
+const SIX_DAYS = 6 * 24 * 3_600_000;
+
+/** "on Thursday at 09:40", "today at 16:10", "on Monday 4 May at 08:00" once the weekday is not enough. */
 function moment(at: Date, { now, zone }: Sight): string {
-  const day = isSameDay(at, now, zone) ? 'today' : `on ${longDay(at, zone)}`;
-  return `${day} at ${clock(at, zone)}`;
+  const near = at.getTime() - now.getTime() < SIX_DAYS;
+  const day = longDay(at, zone);
+  const said = isSameDay(at, now, zone) ? 'today' : `on ${near ? day.split(' ')[0] : day}`;
+  return `${said} at ${clock(at, zone)}`;
 }
 
 function said(own: OwnCase, sight: Sight): Said {
