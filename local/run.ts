@@ -1,5 +1,5 @@
 import { existsSync, mkdirSync, writeFileSync } from 'node:fs';
-import { join, relative } from 'node:path';
+import { join, relative, resolve } from 'node:path';
 import { build } from '../scripts/build.mjs';
 import { sentenceFor } from '../scripts/sentences.mjs';
 import { keepDemoKeys } from './demo-keys.ts';
@@ -12,7 +12,7 @@ import { Supervisor } from './supervisor.ts';
 
 // The second half of `npm start`: everything after installing. Run from the project's folder.
 const root = process.cwd();
-const folder = join(root, process.env.DATA_DIR ?? '.data');
+const folder = resolve(root, process.env.DATA_DIR ?? '.data');
 const say = (line: string) => console.log(line);
 
 async function start(supervisor: Supervisor): Promise<void> {
