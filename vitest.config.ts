@@ -6,6 +6,12 @@ const services = {
   setupFiles: ['tests/setup/environment.ts'],
 };
 
+// Photographs of real cameras are not part of the project.
+const withRealPhotos = Boolean(process.env.WITNESSMARK_REAL_PHOTOS);
+const realPhotos = 'tests/outside/photos/real-photos.test.ts';
+if (!withRealPhotos)
+  console.log(`Not run: ${realPhotos}. Set WITNESSMARK_REAL_PHOTOS to a folder of photographs.`);
+
 export default defineConfig({
   test: {
     allowOnly: false,
@@ -41,7 +47,11 @@ export default defineConfig({
             'app/routes/**/*.test.{ts,tsx}',
             'tests/**/*.test.ts',
           ],
-          exclude: ['tests/boundaries.test.ts', 'tests/{journeys,soak}/**'],
+          exclude: [
+            'tests/boundaries.test.ts',
+            'tests/{journeys,soak}/**',
+            ...(withRealPhotos ? [] : [realPhotos]),
+          ],
           ...services,
         },
       },

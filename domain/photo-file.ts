@@ -35,3 +35,19 @@ export function isTypeOf(said: string, found: PhotoType): boolean {
   const type = said.split(';')[0]?.trim().toLowerCase() ?? '';
   return type === found || (found === 'image/heic' && type === 'image/heif');
 }
+
+/** For a file that `sniffPhoto` does not know. */
+export const NOT_A_PHOTO =
+  'This file is not a photo the shop can read. Send JPEG, PNG, WebP or HEIC.';
+
+/** For a file without a byte. */
+export const EMPTY_PHOTO = 'This file is empty. Choose the photo again.';
+
+const megabytes = (bytes: number) => String(Math.round(bytes / 1_000_000));
+
+/** What is wrong with a photo of `length` bytes, then what to do; null when nothing is. */
+export function sizeSentence(length: number): string | null {
+  if (length === 0) return EMPTY_PHOTO;
+  if (length <= MAX_PHOTO_BYTES) return null;
+  return `This file has ${megabytes(length)} MB and the shop takes ${megabytes(MAX_PHOTO_BYTES)}. Make the photo smaller and send it again.`;
+}

@@ -3,7 +3,7 @@ import { derivePicture } from './derive-picture.ts';
 import type { Answer, Question } from './picture-process.ts';
 
 // A process of its own, with nothing of the server's in it: decodes one picture after the other.
-setPriority(15);
+setPriority(10);
 
 async function answer({ file, type }: Question): Promise<Answer> {
   try {

@@ -1,5 +1,12 @@
 import { Invalid, TooLarge, Unsupported } from '#domain/errors.ts';
-import { MAX_PHOTO_PIXELS, type PhotoType, SNIFFED_BYTES, sniffPhoto } from '#domain/photo-file.ts';
+import {
+  EMPTY_PHOTO,
+  MAX_PHOTO_PIXELS,
+  NOT_A_PHOTO,
+  type PhotoType,
+  SNIFFED_BYTES,
+  sniffPhoto,
+} from '#domain/photo-file.ts';
 import { damaged, Feed, type Walk } from './feed.ts';
 import { walkHeic } from './walk-heic.ts';
 import { walkJpeg } from './walk-jpeg.ts';
@@ -44,7 +51,7 @@ export class PhotoWalk {
   /** The file is over. */
   end(): void {
     if (this.#head.length === 0) {
-      throw new Invalid({ photo: 'This file is empty. Choose the photo again.' });
+      throw new Invalid({ photo: EMPTY_PHOTO });
     }
     if (this.#feed === undefined) this.#begin();
     this.#feed?.end();
@@ -54,9 +61,7 @@ export class PhotoWalk {
   #begin(): void {
     const found = sniffPhoto(this.#head);
     if (found === null) {
-      throw new Unsupported(
-        'This file is not a photo the shop can read. Send JPEG, PNG, WebP or HEIC.',
-      );
+      throw new Unsupported(NOT_A_PHOTO);
     }
     this.mediaType = found;
     this.#feed = new Feed(WALKS[found]((width, height) => this.#see(width, height)));

@@ -1,6 +1,6 @@
 import { validate } from 'uuid';
 import { Invalid, TooLarge } from '#domain/errors.ts';
-import { MAX_PHOTO_BYTES } from '#domain/photo-file.ts';
+import { EMPTY_PHOTO, sizeSentence } from '#domain/photo-file.ts';
 import type { SaidOfBody } from './checked-body.ts';
 
 /** What comes with a photo's bytes. */
@@ -13,8 +13,6 @@ export interface PhotoToPut extends SaidOfBody {
   /** The draft it is to be linked to. */
   entryId: string | null;
 }
-
-const megabytes = (bytes: number) => String(Math.round(bytes / 1_000_000));
 
 // Control characters and whatever a system takes for a folder.
 // eslint-disable-next-line no-control-regex
@@ -31,14 +29,11 @@ export function checkPhotoToPut(input: PhotoToPut): PhotoToPut {
   if (!/^[0-9a-f]{64}$/.test(sha256)) {
     throw new Invalid({ photo: 'This photo came without its SHA-256. Open the case again.' });
   }
-  if (length === 0) throw new Invalid({ photo: 'This file is empty. Choose the photo again.' });
+  if (length === 0) throw new Invalid({ photo: EMPTY_PHOTO });
   if (!Number.isSafeInteger(length) || length < 0) {
     throw new Invalid({ photo: 'This photo came without its length. Open the case again.' });
   }
-  if (length > MAX_PHOTO_BYTES) {
-    throw new TooLarge(
-      `This file has ${megabytes(length)} MB and the shop takes ${megabytes(MAX_PHOTO_BYTES)}. Make the photo smaller and send it again.`,
-    );
-  }
+  const tooLarge = sizeSentence(length);
+  if (tooLarge !== null) throw new TooLarge(tooLarge);
   return { ...input, fileName: fileName === null ? null : tidyName(fileName) || null };
 }

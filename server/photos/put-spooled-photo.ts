@@ -37,9 +37,7 @@ export async function putSpooledPhoto(
         for await (const piece of pieces) {
           length += piece.length;
           if (length > MAX_PHOTO_BYTES) {
-            throw new TooLarge(
-              'This file has more than 50 MB. Make the photo smaller and send it again.',
-            );
+            throw new TooLarge('This file has more than 50 MB. Make the photo smaller.');
           }
           hash.update(piece);
           yield piece;

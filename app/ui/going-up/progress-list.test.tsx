@@ -43,7 +43,7 @@ it('reads out only what is finished or failed', () => {
 
 it('counts what is up, and where the rest is safe', () => {
   expect(goingUpSentence([photo('up'), photo('kept'), photo('going-up')])).toBe(
-    '1 of 3 up. Safe on this phone until then.',
+    '1 of 3 up. Keep this page open until then.',
   );
   expect(goingUpSentence([photo('up'), photo('up')])).toBe('All 2 are up.');
 });

@@ -1,17 +1,18 @@
 import { Button } from '../control/button.tsx';
 import { WitnessMark } from '../mark/witness-mark.tsx';
 import type { GoingUpView } from '../types.ts';
+import '../add/add.css';
 
 interface Props {
   photos: GoingUpView[];
   onRetry?: (id: string) => void;
 }
 
-/** "1 of 3 up. Safe on this phone until then." */
+/** "1 of 3 up. Keep this page open until then." */
 export function goingUpSentence(photos: GoingUpView[]): string {
   const up = photos.filter((photo) => photo.state === 'up').length;
   if (up === photos.length) return up === 1 ? 'It is up.' : `All ${up} are up.`;
-  return `${up} of ${photos.length} up. Safe on this phone until then.`;
+  return `${up} of ${photos.length} up. Keep this page open until then.`;
 }
 
 function Words({ photo, onRetry }: { photo: GoingUpView; onRetry?: (id: string) => void }) {
