@@ -1,4 +1,5 @@
 import type { ReactNode } from 'react';
+import './add.css';
 
 /** The frame of Add to timeline; the camera's step is dark in both themes. */
 export function AddSheet({ camera, children }: { camera?: boolean; children: ReactNode }) {

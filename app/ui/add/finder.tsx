@@ -1,4 +1,5 @@
 import type { ReactNode } from 'react';
+import './add.css';
 
 interface Props {
   /** The camera's picture: a video element. */

@@ -1,4 +1,5 @@
 import type { GoingUpView } from '../types.ts';
+import './add.css';
 
 const words: Record<GoingUpView['state'], (photo: GoingUpView) => string> = {
   waiting: () => 'waiting',

@@ -1,5 +1,6 @@
 import type { ReactNode } from 'react';
 import { Icon } from '../icon.tsx';
+import './add.css';
 
 interface Props {
   onShutter: () => void;

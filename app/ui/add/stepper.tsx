@@ -1,4 +1,5 @@
 import { Icon } from '../icon.tsx';
+import './add.css';
 
 interface Props {
   /** "Rest, hours" */

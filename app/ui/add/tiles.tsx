@@ -1,4 +1,5 @@
 import { Icon, type IconName } from '../icon.tsx';
+import './add.css';
 
 export interface TileView {
   key: string;

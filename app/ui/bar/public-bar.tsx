@@ -1,6 +1,7 @@
 import { Link } from 'react-router';
 import { Wordmark } from '../mark/wordmark.tsx';
 import type { BarLink } from './staff-bar.tsx';
+import './public-bar.css';
 
 /** Over the pages that anyone may open. */
 export function PublicBar({ home, links }: { home: string; links: BarLink[] }) {

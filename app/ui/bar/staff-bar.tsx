@@ -2,6 +2,7 @@ import type { ReactNode } from 'react';
 import { Form, Link } from 'react-router';
 import { Icon } from '../icon.tsx';
 import { Wordmark } from '../mark/wordmark.tsx';
+import './staff-bar.css';
 
 /** Fret lines of a 1049 mm scale that begins at 345, on a bar 1000 wide: x = L (1 − 2^(−n/12)). */
 const frets = Array.from(
@@ -69,7 +70,7 @@ export function StaffBar(props: Props) {
         <Icon name="search" size={22} />
       </Link>
       <details className="bar-menu">
-        <summary>
+        <summary aria-label={`${person}, ${shop}, menu`}>
           <span>
             {person}
             <small>{shop}</small>

@@ -1,4 +1,5 @@
 import type { CaseTagView } from '../types.ts';
+import './case.css';
 
 /** The tag in one line, over the parts of a case that need the whole width. */
 export function CaseHead({ tag }: { tag: CaseTagView }) {

@@ -1,4 +1,5 @@
 import type { ReactNode } from 'react';
+import './case.css';
 
 interface Props {
   /** "Case file 2026-031, parlour guitar by Aldous Pike": the page's heading, for those who do not see the tag. */

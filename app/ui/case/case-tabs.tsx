@@ -1,5 +1,6 @@
 import { Link } from 'react-router';
 import type { BarLink } from '../bar/staff-bar.tsx';
+import './case.css';
 
 /** The parts of a case file. */
 export function CaseTabs({ tabs }: { tabs: (BarLink & { count?: number })[] }) {

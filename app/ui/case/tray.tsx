@@ -1,4 +1,5 @@
 import type { TrayPartView } from '../types.ts';
+import './case.css';
 
 /** The parts that are off, one in each cell, with the place where each is. */
 export function Tray({ parts }: { parts: TrayPartView[] }) {

@@ -2,6 +2,7 @@ import type { ReactNode } from 'react';
 import { WitnessMark } from '../mark/witness-mark.tsx';
 import { RestNext } from '../rest/rest-next.tsx';
 import type { WhatIsNextView } from '../types.ts';
+import './case.css';
 
 const tones = { plain: '', waiting: 'text-amber', sealed: 'text-verdigris' };
 

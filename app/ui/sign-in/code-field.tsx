@@ -1,4 +1,5 @@
 import { TextField } from '../control/text-field.tsx';
+import './sign-in.css';
 
 /** The six digits from the mail; a phone offers them by itself. */
 export function CodeField({ name, error }: { name: string; error?: string }) {

@@ -2,6 +2,7 @@ import type { ReactNode } from 'react';
 import { Link } from 'react-router';
 import { Wordmark } from '../mark/wordmark.tsx';
 import pictureUrl from './picture.svg?no-inline';
+import './sign-in.css';
 
 interface Props {
   /** "Sign in", "Enter the code" */

@@ -2,6 +2,7 @@ import { Link } from 'react-router';
 import { WitnessMark } from '../mark/witness-mark.tsx';
 import { RestRule } from '../rest/rest-rule.tsx';
 import type { RackTagView } from '../types.ts';
+import './tag.css';
 
 const tones = { plain: '', waiting: 'text-amber', sealed: 'text-verdigris' };
 

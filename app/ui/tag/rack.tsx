@@ -1,6 +1,7 @@
 import type { ReactNode } from 'react';
 import type { RailView } from '../types.ts';
 import { Rail } from './rail.tsx';
+import './tag.css';
 
 interface Props {
   /** "Wednesday 15 April, 14:05. Eleven open cases." */

@@ -1,6 +1,7 @@
 import { useId } from 'react';
 import type { RailView } from '../types.ts';
 import { RackRow, RackTag } from './rack-tag.tsx';
+import './tag.css';
 
 /** More than these stand in lines of text under the same rail. */
 const HANGING = 15;

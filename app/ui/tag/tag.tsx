@@ -1,4 +1,5 @@
 import type { CaseTagView } from '../types.ts';
+import './tag.css';
 
 /** The tag of a case. On the phone it lies on its side and keeps its three most needed rows. */
 export function Tag({ tag }: { tag: CaseTagView }) {

@@ -1,5 +1,6 @@
 import { Tick } from '../mark/tick.tsx';
 import type { CheckRowView } from '../types.ts';
+import './verify.css';
 
 const states = { good: 'aligned', bad: 'displaced', open: 'hollow' } as const;
 

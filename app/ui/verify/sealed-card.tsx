@@ -2,6 +2,7 @@ import type { ReactNode } from 'react';
 import { Rosette } from '../mark/rosette.tsx';
 import { PhotoPicture } from '../photo/photo-picture.tsx';
 import type { PhotoView } from '../types.ts';
+import './verify.css';
 
 interface Props {
   /** "Parlour guitar, Aldous Pike, serial …17" */
@@ -27,7 +28,7 @@ export function SealedCard({ title, text, photo, sealValue, rosetteWords, childr
         </div>
       )}
       <div className={photo ? '' : 'case:col-span-2'}>
-        <h3 className="mb-1">{title}</h3>
+        <h2 className="mb-1 text-h3">{title}</h2>
         <p className="text-ink-2">{text}</p>
         {children}
       </div>

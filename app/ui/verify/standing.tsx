@@ -1,4 +1,6 @@
 import type { StandingView } from '../types.ts';
+import './verify.css';
+import '../tag/tag.css';
 
 /** What the warranty is now: the shop's word, as large as the verdict, on the shop's tag. */
 export function Standing({ standing }: { standing: StandingView }) {

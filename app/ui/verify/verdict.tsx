@@ -1,6 +1,7 @@
 import type { ReactNode } from 'react';
 import { HALF_LARGE } from '../mark/strokes.ts';
 import type { VerdictKind } from '../types.ts';
+import './verify.css';
 
 export const verdictWords: Record<VerdictKind, string> = {
   intact: 'Intact',

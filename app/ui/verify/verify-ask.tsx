@@ -2,6 +2,7 @@ import type { ReactNode } from 'react';
 import { Form } from 'react-router';
 import { Button } from '../control/button.tsx';
 import { TextField } from '../control/text-field.tsx';
+import './verify.css';
 
 interface Props {
   action: string;
@@ -15,7 +16,7 @@ interface Props {
 /** The number and the file, above an answer. */
 export function VerifyAsk({ action, number, error, children }: Props) {
   return (
-    <div className="ask">
+    <section className="ask" aria-label="Check a warranty">
       <div>
         <Form action={action}>
           <TextField
@@ -32,6 +33,6 @@ export function VerifyAsk({ action, number, error, children }: Props) {
         </Form>
         {children}
       </div>
-    </div>
+    </section>
   );
 }

@@ -1,6 +1,7 @@
 import type { ReactNode } from 'react';
 import type { VerdictKind } from '../types.ts';
 import { verdictWords } from './verdict.tsx';
+import './verify.css';
 
 interface Props {
   kind: VerdictKind;

@@ -3,6 +3,7 @@ import { Form } from 'react-router';
 import { Button } from '../control/button.tsx';
 import { TextField } from '../control/text-field.tsx';
 import { HALF_LARGE } from '../mark/strokes.ts';
+import './verify.css';
 
 interface Props {
   action: string;
