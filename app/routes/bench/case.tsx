@@ -1,5 +1,5 @@
-import { lazy, Suspense, useEffect } from 'react';
-import { useLocation, useNavigate, useNavigationType, useSearchParams } from 'react-router';
+import { lazy, Suspense } from 'react';
+import { useNavigate, useSearchParams } from 'react-router';
 import type { Route } from './+types/case';
 import { viewerContext } from '#app/context.ts';
 import { fieldsOf } from '#app/lib/field-of.ts';
@@ -21,6 +21,7 @@ import { loadCase } from './case-loader.ts';
 import { CaseToast, justDone } from './case-toast.tsx';
 import { EntryActions } from './entry-actions.tsx';
 import type { BenchHandle } from './layout.tsx';
+import { useLatestEntry } from './use-latest-entry.ts';
 
 const PhotoViewer = lazy(() =>
   import('#app/ui/viewer/photo-viewer.tsx').then((module) => ({ default: module.PhotoViewer })),
@@ -41,21 +42,6 @@ export async function action({ context, params, request }: Route.ActionArgs) {
   } catch (error) {
     return retry(error, form);
   }
-}
-
-/** An open case opens at its latest entry, unless the address or the way back says where. */
-function useLatestEntry(isOpen: boolean, latest: string | null): void {
-  const type = useNavigationType();
-  const { key } = useLocation();
-  useEffect(() => {
-    const elsewhere = window.location.hash !== '' || window.location.search !== '';
-    // The first page of a visit is a POP too, but has no place to go back to: its key is "default".
-    const isBack = type === 'POP' && key !== 'default';
-    if (!isOpen || latest === null || elsewhere || isBack) return;
-    document.getElementById(`entry-${latest}`)?.scrollIntoView({ block: 'start' });
-    // Only when the case is opened: news must not move a page that is being read.
-    // eslint-disable-next-line react-hooks/exhaustive-deps
-  }, []);
 }
 
 export default function CaseFilePage({ loaderData, actionData }: Route.ComponentProps) {

@@ -40,7 +40,7 @@ export default function FindPage({ loaderData }: Route.ComponentProps) {
     <main className="mx-auto max-w-[60rem] px-8 pt-6 pb-16 max-phone:px-4" aria-label="Search">
       <title>Find a case · Witnessmark</title>
       <h1 className="mb-5">Find a case</h1>
-      <Form role="search" className="mb-7 flex flex-wrap items-end gap-3">
+      <Form role="search" aria-label="Cases" className="mb-7 flex flex-wrap items-end gap-3">
         <div className="min-w-0 flex-1 basis-64">
           <TextField
             key={words}

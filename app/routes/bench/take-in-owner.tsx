@@ -22,7 +22,12 @@ export function FindOwner({ words, found }: OwnerSearch) {
       <h2 id="find-owner" className="sr-only">
         Find the owner
       </h2>
-      <Form className="flex flex-wrap items-end gap-3" role="search" preventScrollReset>
+      <Form
+        className="flex flex-wrap items-end gap-3"
+        role="search"
+        aria-label="Owners"
+        preventScrollReset
+      >
         <div className="min-w-0 flex-1 basis-64">
           <TextField
             label="Has the owner been here before?"

@@ -87,7 +87,12 @@ export default function TakeInPage({ loaderData, actionData }: Route.ComponentPr
       <h1 className="mb-6">Take in an instrument</h1>
       {!owner && <FindOwner {...search} />}
       {owner && (
-        <Form className="mb-7 flex flex-wrap items-end gap-3" role="search" preventScrollReset>
+        <Form
+          className="mb-7 flex flex-wrap items-end gap-3"
+          role="search"
+          aria-label="Serials"
+          preventScrollReset
+        >
           <input type="hidden" name="owner" value={owner.id} />
           <div className="min-w-0 flex-1 basis-64">
             <TextField
