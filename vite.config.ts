@@ -5,6 +5,8 @@ import { precompress } from './scripts/precompress.ts';
 
 export default defineConfig({
   plugins: [tailwindcss(), reactRouter(), precompress()],
+  // The pages' security policy takes fonts and drawings from our own address only, not as data.
+  build: { assetsInlineLimit: 0 },
   environments: {
     ssr: { build: { rollupOptions: { input: './server/app.ts' } } },
   },

@@ -9,7 +9,6 @@ import {
   type HandleErrorFunction,
   type RouterContextProvider,
 } from 'react-router';
-import { Problem } from '#domain/errors.ts';
 import { nonceContext, requestContext } from '#server/http/context.ts';
 import { log } from '#server/log.ts';
 
@@ -66,7 +65,7 @@ export default function handleRequest(
 
 /** Logs what a loader, action or page threw: never the request's words, only where and what kind. */
 export const handleError: HandleErrorFunction = (error, { request, context }) => {
-  if (request.signal.aborted || error instanceof Problem) return;
+  if (request.signal.aborted) return;
   // Thrown answers (404 and the like) are spoken to people, not faults of the program.
   if (isRouteErrorResponse(error) && error.status < 500) return;
   const { id, pattern } = context.get(requestContext);

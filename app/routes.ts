@@ -27,6 +27,7 @@ export default [
   route('verify/what-is-checked', 'routes/verify/what-is-checked.tsx'),
   route('verify/:code', 'routes/verify/code.tsx'),
   route('log', 'routes/verify/log.tsx'),
+  route('t/:code', 'routes/tag.ts'),
   route('api/health', 'routes/api/health.ts'),
   route('api/changes', 'routes/api/changes.ts'),
   route('api/cases/:number/photos/:photoId', 'routes/api/photos.ts'),

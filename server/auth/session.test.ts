@@ -1,5 +1,5 @@
 import { v7 } from 'uuid';
-import { beforeEach, describe, expect, it } from 'vitest';
+import { beforeEach, describe, expect, it, vi } from 'vitest';
 import { PUBLIC } from '#domain/viewer.ts';
 import { useDatabase } from '#tests/setup/database.ts';
 import { run, select } from '../db/sql.ts';
@@ -143,5 +143,21 @@ describe('a session', () => {
     expect(await select('SELECT 1 AS one FROM sessions')).toHaveLength(1);
     await sweepExpired({ now: later(STAFF_IDLE_MS) });
     expect(await select('SELECT 1 AS one FROM sessions')).toHaveLength(0);
+  });
+});
+
+describe('the cookies of a shop that people reach by https', () => {
+  it('are refused by browsers on plain or sibling pages', async () => {
+    vi.resetModules();
+    const { env } = await import('../env.ts');
+    const { codeCookie, sessionCookie } = await import('./cookies.ts');
+    env().PUBLIC_URL = 'https://shop.example';
+    const session = await sessionCookie().serialize('id');
+    expect(session).toMatch(/^__Host-witnessmark-session=/);
+    expect(session).toContain('Secure');
+    expect(session).not.toContain('Domain');
+    expect(await codeCookie().serialize('id')).toMatch(
+      /^__Secure-witnessmark-code=.*Path=\/sign-in.*Secure/,
+    );
   });
 });

@@ -156,6 +156,21 @@ describe('the walk', () => {
   });
 });
 
+describe('the code on a printed tag', () => {
+  it('leads staff to the timeline, owners to their case, and others to Verify', async () => {
+    const { tag, closed } = scene.things;
+    const got = await askAll((visitor) => visitor.send(`/t/${tag}`));
+    const staff = `/bench/cases/${closed}/add`;
+    const own = `/portal/cases/${closed}`;
+    expect(got.map(({ answer }) => sentTo(answer))).toEqual([
+      ...[staff, staff, staff],
+      ...[own, '/verify', '/verify'],
+    ]);
+    const none = await askAll((visitor) => visitor.send('/t/AAAAAAAAAAAAAAAA'));
+    expect(new Set(none.map(({ answer }) => sentTo(answer)))).toEqual(new Set(['/verify']));
+  });
+});
+
 describe('a part of a file', () => {
   it.each([
     ['bytes=0-9', 206],
