@@ -10,6 +10,8 @@ import { DEMO_ZONE } from './demo-shop.ts';
 export interface Picture {
   file: string;
   caption: string;
+  /** When the camera says it was taken; by default when it was written down. */
+  takenAt?: Date;
   /** x, y in percent of the upright photo from its left and top. */
   pins?: { x: number; y: number; kind: 'damage' | 'remark'; label: string; note: string }[];
 }
@@ -18,14 +20,14 @@ async function* whole(bytes: Uint8Array) {
   yield await Promise.resolve(bytes);
 }
 
-/** Puts a picture into a case as a phone would, its camera's clock set to `takenAt`. Returns its id. */
+/** Puts a picture into a case as a phone would, its camera's clock set back with it. Returns its id. */
 export async function keepPicture(
   by: StaffViewer,
   caseNumber: string,
-  { file }: Picture,
-  takenAt: Date,
+  { file, takenAt }: Picture,
+  now: Date,
 ): Promise<string> {
-  const bytes = await datedPicture(file, takenAt, DEMO_ZONE);
+  const bytes = await datedPicture(file, takenAt ?? now, DEMO_ZONE);
   const photo = {
     caseNumber,
     photoId: v7(),
@@ -35,6 +37,6 @@ export async function keepPicture(
     length: bytes.length,
     mediaType: 'image/jpeg',
   };
-  const kept = await putPhoto(by, photo, whole(bytes), { now: takenAt });
+  const kept = await putPhoto(by, photo, whole(bytes), { now });
   return kept.photo.id;
 }
