@@ -9,8 +9,11 @@ const services = {
 // Photographs of real cameras are not part of the project.
 const withRealPhotos = Boolean(process.env.WITNESSMARK_REAL_PHOTOS);
 const realPhotos = 'tests/outside/photos/real-photos.test.ts';
-if (!withRealPhotos)
+// This file is read once per project, and it need only be said once.
+if (!withRealPhotos && !process.env.REAL_PHOTOS_SAID) {
+  process.env.REAL_PHOTOS_SAID = '1';
   console.log(`Not run: ${realPhotos}. Set WITNESSMARK_REAL_PHOTOS to a folder of photographs.`);
+}
 
 export default defineConfig({
   test: {

@@ -1,7 +1,7 @@
 import { execFileSync } from 'node:child_process';
 import { afterAll, describe, expect, it } from 'vitest';
 import { aJpeg, aLargeJpeg, aPng } from '#tests/photos/pictures.ts';
-import { CannotDerive, PicturePool } from './picture-pool.ts';
+import { type CannotDerive, PicturePool } from './picture-pool.ts';
 import { PictureProcess } from './picture-process.ts';
 
 const plenty = { memory: 2_000_000_000, time: 60_000 };

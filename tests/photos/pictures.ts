@@ -12,7 +12,7 @@ export function cornersPicture(width = 96, height = 64): InstanceType<typeof Jim
     const corner = (y * 2 < height ? 0 : 2) + (x * 2 < width ? 0 : 1);
     picture.setPixelColor(COLOURS[corner] ?? 0, x, y);
   });
-  return picture as InstanceType<typeof Jimp>;
+  return picture;
 }
 
 /** A JPEG of that picture; `salt` makes the file another one with the same picture. */

@@ -87,6 +87,7 @@ export function PhotoDrop({ caseNumber, entryId, onPhotos }: Props) {
               multiple: true,
               'aria-label': 'Choose photos',
               className: hydrated ? 'sr-only' : '',
+              tabIndex: hydrated ? -1 : 0,
               style: {},
             })}
           />

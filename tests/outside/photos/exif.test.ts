@@ -111,7 +111,7 @@ describe('a file with Exif, read by ExifTool and by us', () => {
 
   it.each(casesOf(cases, 'exif.orientation', 8))('orientation $inputs.value', async (one) => {
     const { value: orientation } = one.inputs as { value: number };
-    const { to_display, swaps_width_height } = one.expected as Record<string, unknown>;
+    const { to_display, swaps_width_height } = one.expected;
     const jpeg = withExif(await aJpeg(), { orientation });
     const file = join(folder, `orientation-${orientation}.jpg`);
     writeFileSync(file, jpeg);
