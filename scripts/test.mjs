@@ -21,8 +21,14 @@ import { sentenceFor } from './sentences.mjs';
 const root = dirname(dirname(fileURLToPath(import.meta.url)));
 const say = (/** @type {string} */ line) => console.log(line);
 const total = { passed: 0, failed: 0 };
+/** @type {Set<import('node:child_process').ChildProcess>} */
+const running = new Set();
 const began = Date.now();
 
+process.on('SIGTERM', () => {
+  for (const child of running) child.kill('SIGTERM');
+  process.exit(1);
+});
 process.chdir(root);
 const reports = mkdtempSync(join(tmpdir(), 'witnessmark-reports-'));
 try {
@@ -105,9 +111,12 @@ async function tests(...projects) {
 function program(path, args) {
   return new Promise((resolve, reject) => {
     const child = spawn(process.execPath, [path, ...args], { cwd: root, stdio: 'inherit' });
+    running.add(child);
     child.on('error', reject);
-    child.on('exit', (code, signal) =>
-      code === 0 ? resolve() : reject(new Error(`It ended with ${code ?? signal}.`)),
-    );
+    child.on('exit', (code, signal) => {
+      running.delete(child);
+      if (code === 0) resolve();
+      else reject(new Error(`It ended with ${code ?? signal}.`));
+    });
   });
 }
