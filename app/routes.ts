@@ -13,6 +13,8 @@ export default [
     route('bench/find', 'routes/bench/find.tsx'),
     route('bench/take-in', 'routes/bench/take-in.tsx'),
     route('bench/cases/:number', 'routes/bench/case.tsx'),
+    route('bench/cases/:number/add', 'routes/bench/add.tsx'),
+    route('bench/cases/:number/entries/:entry', 'routes/bench/entry.tsx'),
     route('bench/cases/:number/close', 'routes/bench/close.tsx'),
     route('bench/cases/:number/warranty', 'routes/bench/warranty.tsx'),
     route('bench/warranties', 'routes/bench/warranties.tsx'),

@@ -1,6 +1,6 @@
 import { useRef, useState } from 'react';
 import { Form, Link, redirect, useSearchParams } from 'react-router';
-import { v7 } from 'uuid';
+import { v7, validate } from 'uuid';
 import type { Route } from './+types/add';
 import { viewerContext } from '#app/context.ts';
 import { fieldsOf } from '#app/lib/field-of.ts';
@@ -20,28 +20,38 @@ import { may } from '#domain/rights.ts';
 import { getCase } from '#server/cases/get-case.ts';
 import { addEntry } from '#server/entries/add-entry.ts';
 import { listTimeline } from '#server/entries/list-timeline.ts';
+import { listCasePhotos } from '#server/photos/list-case-photos.ts';
 import { readShop } from '#server/shop/read-shop.ts';
 import { EntryForm } from './entry-form.tsx';
 import { entryInput } from './entry-input.ts';
 import type { BenchHandle } from './layout.tsx';
 import { openTiles } from './open-tiles.ts';
+import { comingPhotos, loosePhotos } from './named-photos.ts';
 import { PhotoWords } from './photo-words.tsx';
 
 export const handle: BenchHandle = { bar: 'none' };
 
-/** The entry's id is made here once: photos go up under it before there is an entry. */
+/** The form is filled in from where it was opened; news must not change it under the hands. */
 export const shouldRevalidate = () => false;
 
-export async function loader({ context, params: { number } }: Route.LoaderArgs) {
+/**
+ * The entry's id is made here and stands in the address: photos go up under it before there is an
+ * entry, also from a page that was loaded again meanwhile.
+ */
+export async function loader({ context, params: { number }, url }: Route.LoaderArgs) {
+  const entryId = url.searchParams.get('entry') ?? '';
+  if (!validate(entryId)) throw redirect(`/bench/cases/${number}/add?entry=${v7()}`);
   const viewer = context.get(viewerContext);
   const now = new Date();
-  const [file, timeline, { timeZone: zone }] = await Promise.all([
+  const [file, timeline, photos, { timeZone: zone }] = await Promise.all([
     getCase(viewer, { number }, { now }),
     listTimeline(viewer, { caseNumber: number }),
+    listCasePhotos(viewer, { caseNumber: number }),
     readShop(),
   ]).catch(refuse);
   return {
-    entryId: v7(),
+    entryId,
+    loose: loosePhotos(viewer, photos),
     number,
     title: `${file.ordinal}, ${file.kind}`,
     sub: `${file.maker}, ${file.owner}`,
@@ -72,8 +82,7 @@ export async function action({ context, params, request }: Route.ActionArgs) {
 }
 
 export default function AddPage({ loaderData, actionData }: Route.ComponentProps) {
-  const { number, title, sub, phase, deskOnly, from, zone } = loaderData;
-  const [entryId] = useState(actionData?.values.entryId ?? loaderData.entryId);
+  const { number, entryId, title, sub, phase, deskOnly, from, zone } = loaderData;
   const [photos, setPhotos] = useState<GoingUpView[]>([]);
   const [search] = useSearchParams();
   const form = useRef<HTMLFormElement>(null);
@@ -81,12 +90,7 @@ export default function AddPage({ loaderData, actionData }: Route.ComponentProps
   const what = search.get('step') === 'what' || actionData !== undefined;
   const here = `/bench/cases/${number}`;
   const field = fieldsOf(actionData);
-  const named = photos
-    .filter(({ state, final }) => state !== 'failed' || !final)
-    .map(({ id, name, thumb }) => ({
-      ...{ id, name, caption: '', bench: false, linked: false },
-      thumb: thumb ?? null,
-    }));
+  const named = [...loaderData.loose, ...comingPhotos(photos, loaderData.loose)];
   return (
     <AddSheet>
       <title>{`Add to timeline, ${number} · Witnessmark`}</title>
@@ -95,7 +99,7 @@ export default function AddPage({ loaderData, actionData }: Route.ComponentProps
         sub={what ? title : sub}
         back={
           <Link
-            to={what ? `${here}/add` : here}
+            to={what ? `?entry=${entryId}` : here}
             replace={what}
             preventScrollReset={!what}
             aria-label={what ? 'Back to the photos' : 'Close'}
@@ -114,7 +118,7 @@ export default function AddPage({ loaderData, actionData }: Route.ComponentProps
         <p className="p-3.5 phone:hidden">
           <Link
             className="btn btn-primary btn-big w-full"
-            to="?step=what"
+            to={`?entry=${entryId}&step=what`}
             replace
             preventScrollReset={false}
           >

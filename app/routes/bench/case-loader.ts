@@ -6,6 +6,7 @@ import type { TimelineEntry } from '#domain/timeline.ts';
 import type { Viewer } from '#domain/viewer.ts';
 import { getCase, type CaseFile } from '#server/cases/get-case.ts';
 import { listTimeline } from '#server/entries/list-timeline.ts';
+import { listTrouble } from '#server/jobs/list-trouble.ts';
 import { listCasePhotos } from '#server/photos/list-case-photos.ts';
 import { listPeople } from '#server/shop/list-people.ts';
 import { readShop } from '#server/shop/read-shop.ts';
@@ -57,11 +58,12 @@ function caseActs(
 
 /** Everything the case file shows; the photos in full only when one is asked for. */
 export async function loadCase(viewer: Viewer, number: string, photo: string | null, now: Date) {
-  const [file, timeline, shop, people, photos] = await Promise.all([
+  const [file, timeline, shop, people, trouble, photos] = await Promise.all([
     getCase(viewer, { number }, { now }),
     listTimeline(viewer, { caseNumber: number }),
     readShop(),
     listPeople(viewer),
+    listTrouble(viewer, { number }),
     photo === null ? null : listCasePhotos(viewer, { caseNumber: number }),
   ]);
   const sight = { now, zone: shop.timeZone, photoHref: (n: number) => `?photo=${n}` };
@@ -76,6 +78,7 @@ export async function loadCase(viewer: Viewer, number: string, photo: string | n
     phases: phasesView(timeline, sight),
     count: timeline.length,
     status: photosStatus(timeline),
+    trouble: trouble.map(({ sentence }) => sentence),
     isOpen: !file.closedAt,
     isHere: !file.handedBackAt,
     latest: timeline.at(-1)?.id ?? null,

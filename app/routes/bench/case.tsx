@@ -21,6 +21,7 @@ import { loadCase } from './case-loader.ts';
 import { CaseToast, justDone } from './case-toast.tsx';
 import { EntryActions } from './entry-actions.tsx';
 import type { BenchHandle } from './layout.tsx';
+import { TroubleNotice } from './trouble-notice.tsx';
 import { useLatestEntry } from './use-latest-entry.ts';
 
 const PhotoViewer = lazy(() =>
@@ -92,6 +93,7 @@ export default function CaseFilePage({ loaderData, actionData }: Route.Component
           ]}
         />
         {actionData && <Notice tone="failed" lead={actionData.problem} className="mt-5" alert />}
+        <TroubleNotice sentences={loaderData.trouble} />
         <Timeline
           phases={phases}
           actions={({ id }) => {

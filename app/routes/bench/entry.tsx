@@ -5,7 +5,6 @@ import { viewerContext } from '#app/context.ts';
 import { fieldsOf } from '#app/lib/field-of.ts';
 import { refuse } from '#app/lib/problem.ts';
 import { retry } from '#app/lib/retry.ts';
-import { mediaPath } from '#app/lib/views/photo-view.ts';
 import { AddHead } from '#app/ui/add/add-head.tsx';
 import { AddSheet } from '#app/ui/add/add-sheet.tsx';
 import { Button, ButtonLink } from '#app/ui/control/button.tsx';
@@ -29,7 +28,8 @@ import { entryInput } from './entry-input.ts';
 import { entryValues } from './entry-values.ts';
 import type { BenchHandle } from './layout.tsx';
 import { openTiles } from './open-tiles.ts';
-import { PhotoWords, type NamedPhoto } from './photo-words.tsx';
+import { comingPhotos, entryPhotos } from './named-photos.ts';
+import { PhotoWords } from './photo-words.tsx';
 import { SealAsk } from './seal-ask.tsx';
 
 export const handle: BenchHandle = { bar: 'none' };
@@ -46,20 +46,13 @@ async function loadEntry(viewer: Viewer, number: string, entryId: string) {
     throw new Conflict(
       'This entry is sealed. It is not changed any more; add a correction instead.',
     );
-  const linked: NamedPhoto[] = entry.photos.map(({ id, n, caption, visibility }) => ({
-    ...{ id, caption, name: `Photo ${n}`, thumb: mediaPath(id, 320), linked: true },
-    bench: visibility === 'bench',
-  }));
-  const expected: NamedPhoto[] = entry.expected.map(({ id, caption }) => ({
-    ...{ id, caption, name: 'A photo not up yet', thumb: null, linked: true, bench: false },
-  }));
   return {
     number,
     entryId,
     title: `${file.ordinal}, ${file.kind}`,
     values: entryValues(entry, (at) => clockIn(at, zone)),
-    photos: [...linked, ...expected],
-    missing: expected.length,
+    photos: entryPhotos(entry),
+    missing: entry.expected.length,
     shared: entry.visibility === 'shared',
     corrects: entry.corrects?.title ?? null,
     deskOnly: !may(viewer, 'add entry'),
@@ -110,13 +103,6 @@ export default function EntryPage({ loaderData, actionData }: Route.ComponentPro
   const here = `/bench/cases/${number}`;
   const values = actionData?.values['draft.title'] ? actionData.values : loaderData.values;
   const field = fieldsOf({ values, fields: actionData?.fields });
-  const there = new Set(loaderData.photos.map(({ id }) => id));
-  const added: NamedPhoto[] = coming
-    .filter(({ id, state, final }) => !there.has(id) && !(state === 'failed' && final))
-    .map(({ id, name, thumb }) => ({
-      ...{ id, name, caption: '', bench: false, linked: false },
-      thumb: thumb ?? null,
-    }));
   return (
     <AddSheet>
       <title>{`${asks ? 'Seal' : 'Change'} an entry, ${number} · Witnessmark`}</title>
@@ -157,7 +143,10 @@ export default function EntryPage({ loaderData, actionData }: Route.ComponentPro
                 from={from}
                 zone={zone}
               >
-                <PhotoWords photos={[...loaderData.photos, ...added]} field={field} />
+                <PhotoWords
+                  photos={[...loaderData.photos, ...comingPhotos(coming, loaderData.photos)]}
+                  field={field}
+                />
               </EntryForm>
             </div>
             <div className="add-foot grid gap-3">

@@ -4,6 +4,7 @@ import { viewerContext } from '#app/context.ts';
 import { ErrorPage } from '#app/lib/error-page.tsx';
 import { refuse } from '#app/lib/problem.ts';
 import { StaffBar } from '#app/ui/bar/staff-bar.tsx';
+import { themeOf } from '#app/ui/bar/theme.ts';
 import { readShop } from '#server/shop/read-shop.ts';
 import { StaffMenu } from './staff-menu.tsx';
 
@@ -12,10 +13,14 @@ export interface BenchHandle {
   bar?: 'none' | 'desk';
 }
 
-export async function loader({ context }: Route.LoaderArgs) {
+export async function loader({ context, request }: Route.LoaderArgs) {
   const viewer = context.get(viewerContext);
   const { name: shop } = await readShop().catch(refuse);
-  return { shop, person: viewer.kind === 'public' ? '' : viewer.name };
+  return {
+    shop,
+    person: viewer.kind === 'public' ? '' : viewer.name,
+    theme: themeOf(request.headers.get('Cookie')),
+  };
 }
 
 export default function BenchLayout({ loaderData }: Route.ComponentProps) {
@@ -36,7 +41,7 @@ export default function BenchLayout({ loaderData }: Route.ComponentProps) {
           shop={loaderData.shop}
           findAction="/bench/find"
           query={pathname === '/bench/find' ? (new URLSearchParams(search).get('q') ?? '') : ''}
-          menu={<StaffMenu />}
+          menu={<StaffMenu theme={loaderData.theme} />}
           deskOnly={bars.includes('desk')}
         />
       )}

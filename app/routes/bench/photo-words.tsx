@@ -1,18 +1,7 @@
 import type { FieldOf } from '#app/lib/field-of.ts';
 import { CheckField } from '#app/ui/control/check-field.tsx';
 import { TextField } from '#app/ui/control/text-field.tsx';
-
-/** A photo that an entry names: up, or on its way. */
-export interface NamedPhoto {
-  id: string;
-  /** "Photo 13", or the file's name. */
-  name: string;
-  thumb: string | null;
-  caption: string;
-  bench: boolean;
-  /** Already on the entry: it can be taken off. */
-  linked: boolean;
-}
+import type { NamedPhoto } from './named-photos.ts';
 
 /** What each photo shows, and who may see it. */
 export function PhotoWords({ photos, field }: { photos: NamedPhoto[]; field: FieldOf }) {
@@ -43,9 +32,11 @@ export function PhotoWords({ photos, field }: { photos: NamedPhoto[]; field: Fie
               <CheckField
                 label="Bench only"
                 name={`photos.${index}.bench`}
-                defaultChecked={photo.bench}
+                defaultChecked={photo.bench || field(`photos.${index}.bench`).defaultValue === 'on'}
               />
-              {photo.linked && <CheckField label="Take it off" name="takeOff" value={photo.id} />}
+              {photo.leaveOut && (
+                <CheckField label={photo.leaveOut} name="takeOff" value={photo.id} />
+              )}
             </div>
           </div>
         </div>

@@ -8,9 +8,11 @@ import { Dock } from '#app/ui/bar/dock.tsx';
 import { ButtonLink } from '#app/ui/control/button.tsx';
 import { Rack } from '#app/ui/tag/rack.tsx';
 import { listRack } from '#server/cases/list-rack.ts';
+import { listTrouble } from '#server/jobs/list-trouble.ts';
 import { listPeople } from '#server/shop/list-people.ts';
 import { readShop } from '#server/shop/read-shop.ts';
 import { railsView } from './rack-view.ts';
+import { TroubleNotice } from './trouble-notice.tsx';
 import { Whose } from './whose.tsx';
 
 const firstName = (name: string) => name.split(' ')[0] ?? name;
@@ -24,11 +26,15 @@ export async function loader({ context, url }: Route.LoaderArgs) {
   );
   const chosen = people.find(({ id }) => id === who);
   const technicianId = chosen?.id ?? null;
-  const cases = await listRack(viewer, { technicianId }, { now }).catch(refuse);
+  const [cases, trouble] = await Promise.all([
+    listRack(viewer, { technicianId }, { now }),
+    listTrouble(viewer, { number: null }),
+  ]).catch(refuse);
   const bench = people.filter(({ role }) => role !== 'desk');
   return {
     sub: `${longDayTime(now, zone)}. ${countedInWords(cases.length, 'open case', 'open cases')}.`,
     rails: railsView(cases, { now, zone }),
+    trouble: trouble.map(({ sentence }) => sentence),
     whose: [
       { label: 'Everyone', href: '/bench', current: technicianId === null },
       ...bench.map(({ id, name }) => ({
@@ -41,7 +47,7 @@ export async function loader({ context, url }: Route.LoaderArgs) {
 }
 
 export default function RackPage({ loaderData }: Route.ComponentProps) {
-  const { sub, rails, whose } = loaderData;
+  const { sub, rails, whose, trouble } = loaderData;
   useChanges({});
   const takeIn = (big: boolean) => (
     <ButtonLink
@@ -57,6 +63,9 @@ export default function RackPage({ loaderData }: Route.ComponentProps) {
   return (
     <>
       <title>Rack · Witnessmark</title>
+      <div className="mx-auto max-w-360 px-8 max-phone:px-4">
+        <TroubleNotice sentences={trouble} />
+      </div>
       <Rack sub={sub} rails={rails} takeIn={takeIn(false)} whose={<Whose choices={whose} />} />
       <Dock>{takeIn(true)}</Dock>
     </>
