@@ -157,7 +157,7 @@ export function waiting({ workday, hoursAgo }: DemoClock, cast: Cast, series: nu
       '612.00',
     ),
     taken({
-      at: workday(1, '16:25'),
+      at: workday(2, '16:25'),
       by: priya,
       technician: tomasz,
       series,

@@ -38,7 +38,7 @@ export function parlourGuitar(
         },
         job: 'Lifted bridge; crack in the top below it',
         complaint:
-          'The bridge is coming up along the back and there is a crack below it. It stood near a radiator over the winter.',
+          'The bridge is coming up along the back and there is a crack below it. It stood near a radiator.',
         accessories: 'Hard case, strap, spare saddle',
         consentPhotos: 'on',
         publishWork: 'on',
@@ -50,7 +50,7 @@ export function parlourGuitar(
       {
         phase: 'before',
         title: 'Taken in at the counter',
-        text: 'The bridge is coming up along its back edge. It stood near a radiator over the winter and the crack opened last week. Came in its hard case, which reads 35 % inside; strings slackened at the counter before anything else.',
+        text: 'The bridge is coming up along its back edge. It stood near a radiator and the crack opened last week. Came in its hard case, which reads 35 % inside; strings slackened at the counter before anything else.',
         photos: [picture('01-before-whole-front.jpg', 'Whole front, steel rule beside it')],
       },
       { by: priya, minutesLater: 19 },
