@@ -19,7 +19,7 @@ export async function closedCase(
   for (const { title, phase, caption } of entries) {
     const entryId = await writeDraft(repair, technician, { title, phase, benchNote: 'Clamp 4.' });
     if (caption) {
-      const n = await addPhoto(repair, entryId, technician, { caption });
+      const n = await addPhoto(repair, entryId, technician, { caption, stored: true });
       await keepCopy(repair, n, phase === 'before' ? 90 : 160);
     }
     await sealEntry(technician, { caseNumber: repair.number, entryId }, { now });

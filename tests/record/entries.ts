@@ -1,8 +1,10 @@
 import { createHash, randomBytes } from 'node:crypto';
+import { Readable } from 'node:stream';
 import { v7 } from 'uuid';
 import { EntryDraftSchema } from '#domain/entry-draft.ts';
 import type { StaffViewer } from '#domain/viewer.ts';
 import { run, select } from '#server/db/sql.ts';
+import { putStream } from '#server/storage/put-stream.ts';
 import type { TestCase } from './shop.ts';
 
 export interface DraftOptions {
@@ -49,12 +51,15 @@ export async function addPhoto(
     state = 'ready',
     copyKey = `copies/${randomBytes(20).toString('hex')}`,
     copySha256 = sha256(copyKey),
+    stored = false,
   }: {
     visibility?: 'shared' | 'bench';
     caption?: string;
     state?: 'ready' | 'waiting' | 'failed';
     copyKey?: string;
     copySha256?: Buffer;
+    /** Whether the files are in the store too; each holds its own key. */
+    stored?: boolean;
   } = {},
 ): Promise<number> {
   const [last] = await select<{ n: number | null }>(
@@ -76,6 +81,15 @@ export async function addPhoto(
        VALUES (?, 2048, ?, ?, 500, 2048, 1536)`,
       [photoId, copyKey, copySha256],
     );
+  }
+  if (stored) {
+    for (const file of [key, copyKey]) {
+      const bytes = Buffer.from(file);
+      await putStream(file, Readable.from([bytes]), {
+        length: bytes.length,
+        mediaType: 'image/webp',
+      });
+    }
   }
   await run(
     'INSERT INTO entry_photos (id, entry_id, photo_id, visibility, caption) VALUES (?, ?, ?, ?, ?)',
