@@ -14,9 +14,9 @@ const REQUEST_MS = 15 * 60_000;
 const DRAIN_MS = 8_000;
 
 interface Application {
-  createApp(): Express;
-  serverBuild(): Promise<unknown>;
-  closeDatabase(): Promise<void>;
+  createApp: () => Express;
+  serverBuild: () => Promise<unknown>;
+  closeDatabase: () => Promise<void>;
 }
 
 const BUILT = new URL('../build/server/index.js', import.meta.url).href;

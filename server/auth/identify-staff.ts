@@ -1,7 +1,7 @@
 import { errors as joseErrors } from 'jose';
 import { Authenticator } from 'remix-auth';
 import { OAuth2RequestError } from 'remix-auth-oauth2';
-import { Invalid, Problem, Unavailable } from '#domain/errors.ts';
+import { Invalid, Unavailable, type Problem } from '#domain/errors.ts';
 import { log } from '../log.ts';
 import { PATIENCE_MS, staffStrategy, type Identity } from './identity-provider.ts';
 

@@ -103,11 +103,11 @@ const staff: Viewer = {
 };
 
 describe('a job that fails', () => {
-  async function fail(error: unknown, attempt = 1) {
+  async function fail(error: Error, attempt = 1) {
     await run('UPDATE outbox SET attempts = ?, due_at = ?', [attempt - 1, AT]);
     const [job] = await claim();
     if (job === undefined) throw new Error('nothing was claimed');
-    return doJob(job, { now: AT, handler: () => Promise.reject(error as Error) });
+    return doJob(job, { now: AT, handler: () => Promise.reject(error) });
   }
 
   it('waits longer each time, at most an hour', () => {

@@ -145,7 +145,9 @@ describe('an owner signs in without a script', () => {
   it('is told of an address that is none', async () => {
     const answer = await visitor().post('/sign-in', { email: 'ok@b.test\r\nBcc: evil@b.test' });
     expect(answer.status).toBe(400);
-    expect(await answer.text()).toContain('This is not an e-mail address.');
+    const page = await answer.text();
+    expect(page).toContain('This is not an e-mail address.');
+    expect(page).toContain('value="ok@b.test');
     expect(await mailsTo('evil@b.test', { mailUrl })).toEqual([]);
   });
 });

@@ -2,6 +2,7 @@ import { useRef } from 'react';
 import { Form, redirect } from 'react-router';
 import type { Route } from './+types/code';
 import { translate } from '#app/lib/problem.ts';
+import { textsOf } from '#app/lib/read-form.ts';
 import { CodeField } from '#app/ui/sign-in/code-field.tsx';
 import { SignInFrame } from '#app/ui/sign-in/sign-in-frame.tsx';
 import { Button } from '#app/ui/control/button.tsx';
@@ -22,17 +23,17 @@ export async function loader({ request }: Route.LoaderArgs) {
 export async function action({ request, context }: Route.ActionArgs) {
   const asked = await readCodeRequest(request);
   if (asked === null) throw redirect('/sign-in');
-  const form = await request.formData();
+  const { intent, code = '' } = textsOf(await request.formData());
   const { ip } = context.get(requestContext);
   const headers = new Headers();
   try {
-    if (form.get('intent') === 'send again') {
+    if (intent === 'send again') {
       const again = await askForCode({ email: asked.email, ip });
       headers.append('Set-Cookie', await keepCodeRequest({ ...asked, ...again }));
       return redirect('/sign-in/code', { headers });
     }
     const { token, back } = asked;
-    const customerId = await checkCode({ token, code: String(form.get('code') ?? ''), ip });
+    const customerId = await checkCode({ token, code, ip });
     headers.append('Set-Cookie', await startSession(request, { customerId }));
     headers.append('Set-Cookie', await keepCodeRequest(null));
     return redirect(back ?? '/portal', { headers });

@@ -5,12 +5,14 @@ import { Button, ButtonLink } from '#app/ui/control/button.tsx';
 import { TextField } from '#app/ui/control/text-field.tsx';
 import { useFirstWrongField } from '#app/ui/control/use-first-wrong-field.ts';
 import { Notice } from '#app/ui/notice.tsx';
+import { fieldsOf } from '#app/lib/field-of.ts';
 import type { ProblemView } from '#app/lib/problem.ts';
+import type { Retry } from '#app/lib/retry.ts';
 
 interface Props {
   /** Where to go after the sign-in. */
   back: string | null;
-  problem: ProblemView | undefined;
+  problem: ProblemView | Retry | undefined;
 }
 
 /** Both ways in: the shop's account for staff, a code by e-mail for owners. */
@@ -30,12 +32,11 @@ export function SignInForm({ back, problem }: Props) {
       <Form method="post" action={`/sign-in${query}`} ref={form} noValidate className="grid gap-4">
         <TextField
           label="Owners: your e-mail address"
-          name="email"
           type="email"
           autoComplete="email"
           inputMode="email"
           tall
-          error={wrong}
+          {...fieldsOf(problem)('email')}
         />
         <Button kind="primary" size="tall" wide>
           Send a code

@@ -2,7 +2,8 @@ import { redirect } from 'react-router';
 import type { Route } from './+types/sign-in';
 import { viewerContext } from '#app/context.ts';
 import { homeOf } from '#app/lib/home-of.ts';
-import { translate } from '#app/lib/problem.ts';
+import { textsOf } from '#app/lib/read-form.ts';
+import { retry } from '#app/lib/retry.ts';
 import { safeReturn } from '#app/lib/return-path.ts';
 import { SignInForm } from './sign-in-form.tsx';
 import { askForCode } from '#server/auth/ask-for-code.ts';
@@ -18,7 +19,7 @@ export function loader({ context, url }: Route.LoaderArgs) {
 
 export async function action({ request, context, url }: Route.ActionArgs) {
   const form = await request.formData();
-  const email = String(form.get('email') ?? '');
+  const { email = '' } = textsOf(form);
   const { ip } = context.get(requestContext);
   try {
     const asked = await askForCode({ email, ip });
@@ -26,7 +27,7 @@ export async function action({ request, context, url }: Route.ActionArgs) {
     const kept = await keepCodeRequest({ ...asked, back });
     return redirect('/sign-in/code', { headers: { 'Set-Cookie': kept } });
   } catch (error) {
-    return translate(error);
+    return retry(error, form);
   }
 }
 
