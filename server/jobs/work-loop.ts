@@ -7,6 +7,8 @@ import { handlers } from './handlers.ts';
 const AT_ONCE: Record<string, number> = { mail: 4, 'derive-photo': 2 };
 
 const POLL_MS = 500;
+/** The longest pause while the database does not answer. */
+const TROUBLE_MS = 10_000;
 
 /** Claims and does jobs until `stop` is called; `stop` resolves when the last one is settled. */
 export function startWork(): { stop: () => Promise<void> } {
@@ -15,10 +17,10 @@ export function startWork(): { stop: () => Promise<void> } {
   let rest: ReturnType<typeof setTimeout> | undefined;
   let wake: (() => void) | undefined;
 
-  const pause = () =>
+  const pause = (ms: number) =>
     new Promise<void>((resolve) => {
       wake = resolve;
-      rest = setTimeout(resolve, POLL_MS);
+      rest = setTimeout(resolve, ms);
     });
 
   async function round(): Promise<void> {
@@ -41,9 +43,17 @@ export function startWork(): { stop: () => Promise<void> } {
   }
 
   async function loop(): Promise<void> {
+    let failed = 0;
     while (!stopping) {
-      const asleep = pause();
-      await round().catch((error: unknown) => log.warn({ err: error }, 'no jobs could be claimed'));
+      const asleep = pause(Math.min(POLL_MS * 2 ** failed, TROUBLE_MS));
+      try {
+        await round();
+        failed = 0;
+      } catch (error) {
+        // Said once: a database that is gone for an hour would fill the log.
+        if (failed === 0) log.warn({ err: error }, 'no jobs can be claimed');
+        failed += 1;
+      }
       await asleep;
     }
     await Promise.all([...running.values()].flatMap((busy) => [...busy]));
