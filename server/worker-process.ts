@@ -27,7 +27,7 @@ export function keepWorker(): {
       child = undefined;
       if (stopping) return;
       wait = Date.now() - born > LIVED_LONG_MS ? 500 : Math.min(wait * 2, LONGEST_WAIT_MS);
-      log.warn({ code, signal, wait }, 'the worker died and is started again');
+      log.warn({ exit: code, signal, wait }, 'the worker died and is started again');
       again = setTimeout(start, wait);
     });
   };
