@@ -14,8 +14,7 @@ export function SealLine({ seal, arrive }: { seal: SealView; arrive?: boolean })
     <p className="seal-line">
       <WitnessMark state={states[seal.state]} size={18} arrive={arrive} />
       <span>
-        {words(seal)}{' '}
-        {seal.state === 'sealed' && seal.shortHash && <code>{seal.shortHash}</code>}
+        {words(seal)} {seal.state === 'sealed' && seal.shortHash && <code>{seal.shortHash}</code>}
       </span>
     </p>
   );
