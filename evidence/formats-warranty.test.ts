@@ -110,7 +110,7 @@ describe('verifying', () => {
 
   test.each(lines)('%s: %s', (name, verdict) => {
     const bundle = structuredClone(readBundle(text)!.bundle);
-    const key = name!.replace("'", '\u2019');
+    const key = name.replace("'", '\u2019');
     change[key]!(bundle);
     const report = verifyBundle(JSON.stringify(bundle), outside[key] ?? { logKeyId });
     expect(report.verdict).toBe(verdict);

@@ -13,7 +13,7 @@ export const TextShownSchema = z.strictObject({ v: z.literal(1), text: z.string(
 export type TextShown = z.output<typeof TextShownSchema>;
 
 /** A numbered mark on a photo; x and y are ten-thousandths of its width and height. */
-export const PinSchema = z.strictObject({
+const PinSchema = z.strictObject({
   n: wholeFrom(1),
   x: wholeFrom(0).check(z.maximum(10000)),
   y: wholeFrom(0).check(z.maximum(10000)),
@@ -24,7 +24,7 @@ export const PinSchema = z.strictObject({
 export type Pin = z.output<typeof PinSchema>;
 
 /** What is said about a photo; `taken` is text: the camera's own words, a zone only if it gave one. */
-export const PhotoWordsSchema = z.strictObject({
+const PhotoWordsSchema = z.strictObject({
   n: PhotoNumberSchema,
   caption: z.string(),
   taken: z.nullable(z.string()),
@@ -38,7 +38,7 @@ export const PhotoListSchema = z
   .check(z.refine((photos) => rises(photos.map(({ n }) => n))));
 
 /** A wait for glue or finish; each time null where it has none. */
-export const RestSchema = z.strictObject({
+const RestSchema = z.strictObject({
   product: z.string(),
   from: InstantSchema,
   clampsOff: z.nullable(InstantSchema),

@@ -26,7 +26,7 @@ export const LogStartShownSchema = z.strictObject({
 export type LogStartShown = z.output<typeof LogStartShownSchema>;
 
 /** What a key is for; no key has two uses. */
-export const KeyUseSchema = z.enum(['log', 'credential', 'paper', 'witness']);
+const KeyUseSchema = z.enum(['log', 'credential', 'paper', 'witness']);
 export type KeyUse = z.output<typeof KeyUseSchema>;
 
 /** A key is added, retired or revoked; the last two repeat what the first said of it. */

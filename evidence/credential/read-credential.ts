@@ -33,7 +33,7 @@ export function readCredential(
   }
   const publicKey = publicKeyOf(kid);
   if (!publicKey) throw new SignatureError('The log lists no credential key of this id.');
-  if (!signedBy(publicKey)) throw new SignatureError("The credential's signature does not hold.");
+  if (!signedBy(publicKey)) throw new SignatureError('The credential’s signature does not hold.');
   return { kid, ...readPayload(payload) };
 }
 

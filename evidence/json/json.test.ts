@@ -45,7 +45,7 @@ describe('sealing', () => {
     ['bytes', new Uint8Array(2)],
     ['a bigint', 1n],
     ['a function', () => 1],
-    ['a hole', [, 1]],
+    ['a hole', new Array(2)],
     ['half a character', 'x\ud800'],
     ['an instance', new (class Thing {})()],
   ])('%s cannot be sealed', (_, wrong) => {

@@ -35,7 +35,7 @@ export function readCheckpoint(
     throw new NoteError('This checkpoint bears two signatures of one key of its log.');
   }
   if (own.length === 0 || own.some((line, at) => line !== signatures[at])) {
-    throw new NoteError("A log's own signatures come first on its checkpoint.");
+    throw new NoteError('A log’s own signatures come first on its checkpoint.');
   }
   const stamped = toUtf8(`${text}\n${own.map(signatureLine).join('')}`);
   return { ...head, note, signers, stamped };

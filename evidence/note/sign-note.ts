@@ -17,9 +17,9 @@ export function signNote(text: string, signer: NoteSigner): string {
   const { name, secretKey } = signer;
   // eslint-disable-next-line no-control-regex -- control characters are what is looked for
   if (!text.endsWith('\n') || /[\u0000-\u0009\u000b-\u001f]/.test(text)) {
-    throw new NoteError("A note's text ends in a newline and holds no other control character.");
+    throw new NoteError('A note’s text ends in a newline and holds no other control character.');
   }
-  if (!isKeyName(name)) throw new NoteError("A key's name has no spaces and no plus sign.");
+  if (!isKeyName(name)) throw new NoteError('A key’s name has no spaces and no plus sign.');
   const keyId = noteKeyId(name, LOG_TYPE, ed25519PublicKey(secretKey));
   const signature = signEd25519(toUtf8(text), secretKey);
   return `${text}\n${signatureLine({ name, keyId, signature })}`;

@@ -28,7 +28,7 @@ export function noteKeyId(name: string, type: NoteKeyType, publicKey: Uint8Array
  */
 export function encodeVkey(key: Omit<NoteKey, 'id'>): string {
   const { name, type, publicKey } = key;
-  if (!isKeyName(name)) throw new KeyError("A key's name has no spaces and no plus sign.");
+  if (!isKeyName(name)) throw new KeyError('A key’s name has no spaces and no plus sign.');
   if (publicKey.length !== 32) throw new KeyError('An Ed25519 public key is 32 bytes long.');
   const encoded = toBase64(concat(Uint8Array.of(type), publicKey));
   return `${name}+${noteKeyId(name, type, publicKey)}+${encoded}`;
@@ -40,7 +40,7 @@ export function encodeVkey(key: Omit<NoteKey, 'id'>): string {
  */
 export function decodeVkey(text: string): NoteKey {
   const match = /^([^+]+)\+([0-9a-f]{8})\+([A-Za-z0-9+/=]+)$/.exec(text);
-  if (!match) throw new KeyError("This is not a note's key.");
+  if (!match) throw new KeyError('This is not a note’s key.');
   const [, name, id, encoded] = match as unknown as [string, string, string, string];
   const [type, ...publicKey] = decode(encoded);
   if ((type !== LOG_TYPE && type !== WITNESS_TYPE) || publicKey.length !== 32) {
@@ -55,6 +55,6 @@ function decode(encoded: string): Uint8Array {
   try {
     return fromBase64(encoded);
   } catch (cause) {
-    throw new KeyError("This is not a note's key.", { cause });
+    throw new KeyError('This is not a note’s key.', { cause });
   }
 }

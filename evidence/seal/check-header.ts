@@ -25,10 +25,10 @@ function ownChain(header: Header): Rule[] {
     always(header),
     [isCaseKind(kind), 'kind', 'this kind belongs to a case'],
     [(kind === 'log-start') !== (seq === 0), 'kind', 'a log starts once, with its first entry'],
-    [visibility !== 'shared', 'visibility', "the log's own entries are open to all"],
-    [photos.length > 0, 'photos', "the log's own entries have no photos"],
-    [Object.keys(parts).join() !== 'shown', 'parts', "the log's own entries have one part, shown"],
-    [occurredAt !== null, 'occurredAt', "the log's own entries tell of no other time"],
+    [visibility !== 'shared', 'visibility', 'the log’s own entries are open to all'],
+    [photos.length > 0, 'photos', 'the log’s own entries have no photos'],
+    [Object.keys(parts).join() !== 'shown', 'parts', 'the log’s own entries have one part, shown'],
+    [occurredAt !== null, 'occurredAt', 'the log’s own entries tell of no other time'],
   ];
 }
 
@@ -37,7 +37,7 @@ function inCase(header: Header): Rule[] {
   const bench = visibility === 'bench';
   return [
     always(header),
-    [isLogKind(kind), 'kind', "this kind belongs to the log's own chain"],
+    [isLogKind(kind), 'kind', 'this kind belongs to the log’s own chain'],
     [seq >= ENTRIES_PER_CASE, 'seq', `a case has at most ${ENTRIES_PER_CASE} entries`],
     [bench && 'shown' in parts, 'parts', 'an entry for the bench only shows nothing'],
     [bench && occurredAt !== null, 'occurredAt', 'an entry for the bench only tells no time'],

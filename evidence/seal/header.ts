@@ -17,7 +17,7 @@ export const VisibilitySchema = z.enum(['shared', 'bench']);
 export type Visibility = z.output<typeof VisibilitySchema>;
 
 /** A photo as a header names it: two commitments, each with a salt of its own. */
-export const HeaderPhotoSchema = z.strictObject({
+const HeaderPhotoSchema = z.strictObject({
   n: PhotoNumberSchema,
   original: Hex32Schema,
   published: Hex32Schema,
@@ -25,7 +25,7 @@ export const HeaderPhotoSchema = z.strictObject({
 });
 
 /** The last time-stamped checkpoint there was when an entry was sealed. */
-export const AfterSchema = z.strictObject({
+const AfterSchema = z.strictObject({
   size: wholeFrom(1),
   root: Hex32Schema,
   stamp: Hex32Schema,

@@ -25,6 +25,6 @@ export function readStanding(
   }
   const publicKey = publicKeyOf(kid);
   if (!publicKey) throw new SignatureError('The log lists no credential key of this id.');
-  if (!signedBy(publicKey)) throw new SignatureError("The standing's signature does not hold.");
+  if (!signedBy(publicKey)) throw new SignatureError('The standing’s signature does not hold.');
   return { standing: readShape(StandingSchema, payload, 'standing'), kid };
 }

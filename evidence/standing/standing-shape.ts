@@ -2,8 +2,8 @@ import { Hex16Schema, Hex32Schema, InstantSchema, wholeFrom } from '#evidence/sh
 import { z } from '#evidence/shape/zod.ts';
 
 /** What a warranty is now. */
-export const STANDING_WORDS = ['in force', 'ended', 'suspended', 'withdrawn', 'replaced'] as const;
-export const StandingWordSchema = z.enum(STANDING_WORDS);
+const STANDING_WORDS = ['in force', 'ended', 'suspended', 'withdrawn', 'replaced'] as const;
+const StandingWordSchema = z.enum(STANDING_WORDS);
 export type StandingWord = z.output<typeof StandingWordSchema>;
 
 export const STANDING_HEADER = { alg: 'Ed25519', typ: 'witnessmark-standing+jwt' } as const;

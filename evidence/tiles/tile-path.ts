@@ -1,7 +1,7 @@
 import { LimitError } from '#evidence/errors.ts';
 
 /** How many hashes, or entries, a full tile holds. */
-export const TILE_WIDTH = 256;
+const TILE_WIDTH = 256;
 
 /**
  * Path of a tile of the Merkle tree below the log's address (C2SP tlog-tiles).

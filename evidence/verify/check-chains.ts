@@ -69,7 +69,7 @@ function checkLost({ own, findings }: Work, item: Item): void {
 }
 
 /** A later log key's leaf may stand under a checkpoint that the key before it signed. */
-export function mayBeHandOver(item: Item): boolean {
+function mayBeHandOver(item: Item): boolean {
   const key = shownOf<KeyShown>(item, 'key');
   return key?.use === 'log' && key.act === 'add' && item.index > 1;
 }

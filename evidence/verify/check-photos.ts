@@ -29,7 +29,9 @@ export function checkPhotos(work: Work): void {
     numbers.set(story, all);
     checkWords(work, item, own, all);
   }
-  findings.line('photos', 'not-checked', { count: comparable });
+  if (chain.some(({ header }) => header && header.photos.length > 0)) {
+    findings.line('photos', 'not-checked', { count: comparable });
+  }
 }
 
 /** C of the entry whose photos an entry shares: its own, or the one it amends if that is here. */

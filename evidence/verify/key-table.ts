@@ -100,12 +100,12 @@ function checkStart(
   const [start, first] = own;
   const shown = start && shownOf<LogStartShown>(start, 'log-start');
   const logKeys = keys.filter(({ use }) => use === 'log').map(({ vkey }) => vkey);
-  if (start?.index !== 0) throw new KeyError("The log's first entry is missing.");
+  if (start?.index !== 0) throw new KeyError('The log’s first entry is missing.');
   // A start that is lost or of a form not known here was reported; nothing follows from it.
   if (!shown) return;
   if (shown.origin !== origin) throw new KeyError('The log started under another name.');
   if (first?.index !== 1 || keys[0]?.leaf !== first || keys[0].vkey !== shown.vkey) {
-    throw new KeyError("The log's second entry is not the key it started with.");
+    throw new KeyError('The log’s second entry is not the key it started with.');
   }
   if (logKeys.join('\n') !== vkeys.join('\n')) {
     throw new KeyError('The record lists other keys than its log does.');

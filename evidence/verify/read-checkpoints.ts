@@ -41,7 +41,7 @@ export function readCheckpoints(
 function checkLog({ origin, vkeys }: Bundle): boolean {
   if (!isOrigin(origin)) throw new ShapeError('This is not the origin of a witness log.');
   for (const { name, type } of vkeys.map(decodeVkey)) {
-    if (name !== origin || type !== LOG_TYPE) throw new KeyError("A key is not this log's.");
+    if (name !== origin || type !== LOG_TYPE) throw new KeyError('A key is not this log’s.');
   }
   if (vkeys.length === 0) throw new KeyError('The record names no key of its log.');
   return true;

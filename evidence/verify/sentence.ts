@@ -11,6 +11,23 @@ export function sentenceOf({ id, outcome, data }: Finding): string {
   return sentence(data);
 }
 
+const MONTHS =
+  'January February March April May June July August September October November December';
+
+/** An instant for people: `1 June 2026, 12:00 UTC`; in UTC, because it is read anywhere. */
+function moment(instant: FindingData[string] | undefined): string {
+  const [, year, month, day, time] =
+    /^(\d{4})-(\d\d)-(\d\d)T(\d\d:\d\d)/.exec(String(instant)) ?? [];
+  if (day === undefined) return 'a day that is not known';
+  return `${Number(day)} ${MONTHS.split(' ')[Number(month) - 1]} ${year}, ${time} UTC`;
+}
+
+/** A count with its word, which takes an s for all but one. */
+function counted(count: FindingData[string] | undefined, one: string, many = `${one}s`): string {
+  return `${count} ${count === 1 ? one : many}`;
+}
+const entries = (count: FindingData[string] | undefined) => counted(count, 'entry', 'entries');
+
 const where = ({ chain, seq, position }: FindingData) => {
   if (seq === undefined) return position === undefined ? '' : ` (item ${position} of the file)`;
   return chain === 'log' ? ` (entry ${seq} of the log itself)` : ` (entry ${seq} of the case)`;
@@ -29,7 +46,7 @@ const FALLBACK: Record<Outcome, Sentence> = {
   checked: () => 'Checked here.',
   failed: failing('Something'),
   'not-checked': unknown('Something'),
-  'shop-word': () => "This is the shop's word.",
+  'shop-word': () => 'This is the shop’s word.',
 };
 
 const SENTENCES: Record<FindingId, Partial<Record<Outcome, Sentence>>> = {
@@ -44,14 +61,15 @@ const SENTENCES: Record<FindingId, Partial<Record<Outcome, Sentence>>> = {
     'not-checked': ({ member }) => `The file holds "${member}", which is not known here.`,
   },
   checkpoint: {
-    checked: ({ size }) => `The log's head of ${size} entries is signed by the log's key.`,
+    checked: ({ size }) => `The log’s head of ${entries(size)} is signed by the log’s key.`,
     failed: failing('A signed head of the log'),
     'not-checked': unknown('A signed head of the log'),
   },
   inclusion: {
-    checked: ({ count }) => `All ${count} entries of this record are in the log under that head.`,
-    failed: failing("An entry's place in the log"),
-    'not-checked': unknown("An entry's place in the log"),
+    checked: ({ count }) =>
+      `${entries(count)} of this record: every one is in the log under that head.`,
+    failed: failing('An entry’s place in the log'),
+    'not-checked': unknown('An entry’s place in the log'),
   },
   header: { failed: failing('An entry'), 'not-checked': unknown('An entry') },
   'unknown-kind': {
@@ -59,8 +77,8 @@ const SENTENCES: Record<FindingId, Partial<Record<Outcome, Sentence>>> = {
       `An entry is of the kind "${data.kind}", not known here${where(data)}.`,
   },
   'own-chain': {
-    checked: ({ count }) => `The log's own ${count} entries follow one another, all open.`,
-    failed: failing("The chain of the log's own entries"),
+    checked: ({ count }) => `The log’s own chain of ${entries(count)} is whole and open.`,
+    failed: failing('The chain of the log’s own entries'),
   },
   'case-chain': {
     checked: ({ first, last }) => `Entries ${first} to ${last} of the case follow one another.`,
@@ -71,7 +89,7 @@ const SENTENCES: Record<FindingId, Partial<Record<Outcome, Sentence>>> = {
     failed: (data) => `The contents of an entry are missing, and no entry says so${where(data)}.`,
   },
   parts: {
-    checked: ({ count }) => `The ${count} parts opened here are what was sealed.`,
+    checked: ({ count }) => `${counted(count, 'part')} opened here: as sealed, every one.`,
     failed: failing('A part of an entry'),
     'not-checked': unknown('A part of an entry'),
   },
@@ -80,7 +98,7 @@ const SENTENCES: Record<FindingId, Partial<Record<Outcome, Sentence>>> = {
   },
   photos: {
     failed: failing('A photo'),
-    'not-checked': ({ count }) => `${count} pictures can be compared; none was.`,
+    'not-checked': ({ count }) => `${counted(count, 'picture')} can be compared; none was.`,
   },
   salts: { failed: failing('A salt') },
   order: {
@@ -92,12 +110,13 @@ const SENTENCES: Record<FindingId, Partial<Record<Outcome, Sentence>>> = {
     failed: failing('What an entry names'),
   },
   keys: {
-    checked: ({ count }) => `The log lists ${count} keys, each with its use.`,
+    checked: ({ count }) => `The log lists ${counted(count, 'key')}, each with its use.`,
     failed: failing('A key of the log'),
     'not-checked': unknown('A key of the log'),
   },
   growth: {
-    checked: ({ count }) => `${count} earlier heads of the log grew into this one, unchanged.`,
+    checked: ({ count }) =>
+      `${counted(count, 'earlier head')} of the log grew into this one, unchanged.`,
     failed: failing('An earlier head of the log'),
     'not-checked': unknown('An earlier head of the log'),
   },
@@ -105,27 +124,26 @@ const SENTENCES: Record<FindingId, Partial<Record<Outcome, Sentence>>> = {
     failed: failing('A time-stamp'),
     'not-checked': (data) =>
       data.count
-        ? `The record holds ${data.count} outside time-stamps; they are not read here yet.`
+        ? `The record holds ${counted(data.count, 'outside time-stamp')}, not read here yet.`
         : unknown('A time-stamp')(data),
-    'shop-word': () => 'No outside time-stamp: when something was sealed is the shop\u2019s word.',
+    'shop-word': () => 'No outside time-stamp: when something was sealed is the shop’s word.',
   },
   bracket: {
     'shop-word': ({ count }) =>
-      `${count} entries are not bracketed from below: nothing from outside shows that they were ` +
-      'not made earlier.',
+      `${entries(count)} not bracketed from below: nothing from outside shows that it was not ` +
+      'sealed earlier.',
   },
   warranty: {
-    checked: () =>
-      'The warranty is signed by the shop\u2019s credential key and stands in the log.',
+    checked: () => 'The warranty is signed by the shop’s credential key and stands in the log.',
     failed: failing('The warranty'),
     'not-checked': unknown('The warranty'),
   },
   standing: {
-    failed: failing("The shop's word on the warranty"),
-    'not-checked': unknown("The shop's word on the warranty"),
+    failed: failing('The shop’s word on the warranty'),
+    'not-checked': unknown('The shop’s word on the warranty'),
     'shop-word': ({ word, at }) =>
       word
-        ? `The shop says, signed at ${at}: ${word}. The record it shows says the same.`
+        ? `The shop says, signed on ${moment(at)}: ${word}. The record it shows says the same.`
         : 'The record does not say what the warranty is now. Ask for a newer one.',
   },
   'whose-key': {
@@ -140,25 +158,25 @@ const SENTENCES: Record<FindingId, Partial<Record<Outcome, Sentence>>> = {
         : `The key known from elsewhere does not lead to key ${key} in this record.`,
   },
   'paper-seal': {
-    checked: () => 'The seal value on the paper is this warranty\u2019s.',
-    failed: () => 'The seal value on the paper is not this warranty\u2019s.',
+    checked: () => 'The seal value on the paper is this warranty’s.',
+    failed: () => 'The seal value on the paper is not this warranty’s.',
     'not-checked': unknown('The seal value on the paper'),
   },
   code: {
-    checked: () => 'The code is this warranty\u2019s.',
-    failed: () => 'The code is not this warranty\u2019s.',
+    checked: () => 'The code is this warranty’s.',
+    failed: () => 'The code is not this warranty’s.',
     'not-checked': unknown('The code'),
   },
   'later-entries': {
-    checked: ({ size }) => `Nothing later is in the log up to its head of ${size} entries.`,
+    checked: ({ size }) => `Nothing later is in the log up to its head of ${entries(size)}.`,
     failed: failing('The public log'),
     'not-checked': (data) => `The public log was not fully compared${where(data)}${why(data)}.`,
     'shop-word': ({ size }) =>
-      `That nothing later is in the log up to its head of ${size} entries is the shop\u2019s word.`,
+      `That nothing later is in the log up to its head of ${entries(size)} is the shop’s word.`,
   },
   'kept-back': {
-    checked: ({ entries, kept, kind, at }) =>
-      `${entries} entries, ${kept} kept by the shop: sealed, not shown; complete up to ` +
-      `${kind === 'handed-back' ? 'hand-back' : 'the last one shown'} on ${at?.toString().slice(0, 10)}.`,
+    checked: ({ count, kept, kind, at }) =>
+      `${entries(count)}, ${kept} kept by the shop: sealed, not shown; complete up to ` +
+      `${kind === 'handed-back' ? 'hand-back' : 'the last one shown'} on ${moment(at)}.`,
   },
 };

@@ -45,24 +45,23 @@ test('a warranty, from its close on, is Intact and in force', () => {
   expect(report.record?.credential?.credentialSubject.code).toBe(CODE);
   expect(report.findings.map(sentenceOf)).toMatchInlineSnapshot(`
     [
-      "All 6 entries of this record are in the log under that head.",
-      "The 6 parts opened here are what was sealed.",
+      "6 entries of this record: every one is in the log under that head.",
+      "6 parts opened here: as sealed, every one.",
       "The log lists 2 keys, each with its use.",
-      "The log's own 3 entries follow one another, all open.",
+      "The log’s own chain of 3 entries is whole and open.",
       "Entries 3 to 5 of the case follow one another.",
-      "The log's head of 10 entries is signed by the log's key.",
+      "The log’s head of 10 entries is signed by the log’s key.",
       "Along the log, time never goes back unsaid.",
       "Entries name the entries they must name.",
-      "0 pictures can be compared; none was.",
       "No outside time-stamp: when something was sealed is the shop’s word.",
       "The warranty is signed by the shop’s credential key and stands in the log.",
-      "The shop says, signed at 2026-06-01T12:00:00.000Z: in force. The record it shows says the same.",
+      "The shop says, signed on 1 June 2026, 12:00 UTC: in force. The record it shows says the same.",
       "Key 57936deb4a6da25527f62a73d879d8b6, known to you from elsewhere, leads to this record.",
       "The seal value on the paper is this warranty’s.",
       "The code is this warranty’s.",
       "Nothing later is in the log up to its head of 10 entries.",
-      "3 entries are not bracketed from below: nothing from outside shows that they were not made earlier.",
-      "3 entries, 0 kept by the shop: sealed, not shown; complete up to hand-back on 2026-04-09.",
+      "3 entries not bracketed from below: nothing from outside shows that it was not sealed earlier.",
+      "3 entries, 0 kept by the shop: sealed, not shown; complete up to hand-back on 9 April 2026, 10:15 UTC.",
     ]
   `);
 });

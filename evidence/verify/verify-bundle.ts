@@ -95,7 +95,7 @@ function countKeptBack({ chain, findings }: Work): void {
   if (!last) return;
   findings.line('kept-back', 'checked', {
     ...placeOf(last),
-    entries: chain.length,
+    count: chain.length,
     kept: kept.length,
     kind: last.header?.kind ?? null,
     at: last.header?.recordedAt ?? null,
