@@ -8,6 +8,8 @@ const DRAIN_BYTES = 80 * 1024 * 1024;
 
 function drain(request: Request): void {
   let left = DRAIN_BYTES;
+  // Whoever was reading for the route would pause the stream at its next piece.
+  request.removeAllListeners('data');
   request.on('data', (chunk: Buffer) => {
     left -= chunk.length;
     if (left < 0) request.destroy();

@@ -17,7 +17,6 @@ function headersOf({ mediaType, saveAs }: Media, etag: string): Headers {
     'Cache-Control': KEEP,
     ETag: etag,
     'Accept-Ranges': 'bytes',
-    'X-Content-Type-Options': 'nosniff',
   });
   if (saveAs !== null) headers.set('Content-Disposition', `attachment; filename="${saveAs}"`);
   return headers;

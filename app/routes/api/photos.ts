@@ -7,7 +7,7 @@ import { sessionViewer } from '#server/auth/session-viewer.ts';
 import { ArrivedDamaged } from '#server/photos/arrived-damaged.ts';
 import { putPhoto } from '#server/photos/put-photo.ts';
 import { takePhotoForm } from './photo-form.ts';
-import { drain, piecesOf } from './request-body.ts';
+import { piecesOf } from './request-body.ts';
 
 const SIGNED_OUT = 'You were signed out while the photo went up. Sign in and send it again.';
 const NO_METHOD = 'A photo is sent by PUT. Open the case and add it there.';
@@ -70,7 +70,5 @@ export async function action({ request, url, params, context }: Route.ActionArgs
     if (!(error instanceof ArrivedDamaged)) return problemResponse(error);
     const { code, sentence } = error;
     return Response.json({ code, sentence, fields: {} }, { status: 400 });
-  } finally {
-    void drain(reader);
   }
 }
