@@ -25,10 +25,21 @@ function forbidden(pattern: string, viewer: Viewer): Problem {
   return new NotAllowed();
 }
 
+/** Nothing the guard says may be kept by anyone on the way: with another session it would say otherwise. */
+function guarded(response: Response): Response {
+  if (!response.headers.has('Cache-Control')) {
+    response.headers.set('Cache-Control', 'private, no-cache');
+  }
+  return response;
+}
+
 function refusal(problem: Problem, forPrograms: boolean): never {
-  if (forPrograms) throw problemResponse(problem);
+  if (forPrograms) throw guarded(problemResponse(problem));
   return refuse(problem);
 }
+
+const forProgram = (code: string, sentence: string, status: number) =>
+  guarded(Response.json({ code, sentence }, { status }));
 
 /**
  * The one door of the application: finds out who is asking, and lets the request through to the
@@ -49,21 +60,15 @@ export const guard: MiddlewareFunction<Response> = async (
     case 'go':
       break;
     case 'sign in':
-      if (forPrograms)
-        throw Response.json({ code: 'signed-out', sentence: SIGNED_OUT }, { status: 401 });
-      throw redirect(signInPath(url.pathname + url.search));
+      if (forPrograms) throw forProgram('signed-out', SIGNED_OUT, 401);
+      throw guarded(redirect(signInPath(url.pathname + url.search)));
     case 'forbidden':
       return refusal(forbidden(path, viewer), forPrograms);
     case 'no such method':
-      if (forPrograms)
-        throw Response.json({ code: 'method', sentence: NO_METHOD }, { status: 405 });
+      if (forPrograms) throw forProgram('method', NO_METHOD, 405);
       throw data({ code: 'method', problem: NO_METHOD, fields: {} }, { status: 405 });
     case 'no such route':
       return refusal(new NotFound(), forPrograms);
   }
-  const response = await next();
-  if (!response.headers.has('Cache-Control')) {
-    response.headers.set('Cache-Control', 'private, no-cache');
-  }
-  return response;
+  return guarded(await next());
 };

@@ -44,8 +44,8 @@ export function visits(things: Things): Record<string, Visit[]> {
       visit(`/bench/cases/${NOBODY.number}`, BENCH_NOT_THERE),
     ],
     '/bench/cases/:number/add': [
-      visit(`/bench/cases/${open}/add`, BENCH),
-      visit(`/bench/cases/${NOBODY.number}/add`, BENCH_NOT_THERE),
+      visit(`/bench/cases/${open}/add?entry=${NOBODY.id}`, BENCH),
+      visit(`/bench/cases/${NOBODY.number}/add?entry=${NOBODY.id}`, BENCH_NOT_THERE),
     ],
     '/bench/cases/:number/entries/:entry': [
       visit(`/bench/cases/${open}/entries/${draft}`, BENCH),

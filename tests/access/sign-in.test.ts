@@ -2,6 +2,7 @@ import { v7 } from 'uuid';
 import { afterEach, beforeAll, describe, expect, it } from 'vitest';
 import { demoStaff } from '#local/demo-staff.ts';
 import { run } from '#server/db/sql.ts';
+import { runDueJobs } from '#server/jobs/run-due-jobs.ts';
 import { startApp } from '#tests/setup/app.ts';
 import { mailsTo, waitForMail } from '#tests/setup/mail.ts';
 import { useAppDatabase } from './app-database.ts';
@@ -38,11 +39,17 @@ afterEach(async () => {
   await run('DELETE FROM rate_counts');
 });
 
+// The program's own worker sends them too, but last of all on a busy machine.
+async function nextMail(before: number) {
+  await runDueJobs({ kinds: ['mail'] });
+  return waitForMail(EMAIL, { mailUrl, count: before + 1 });
+}
+
 async function codeFor(owner: Visitor, query = ''): Promise<string> {
   const before = (await mailsTo(EMAIL, { mailUrl })).length;
   const asked = await owner.post(`/sign-in${query}`, { email: EMAIL });
   expect([asked.status, sentTo(asked)]).toEqual([302, '/sign-in/code']);
-  const mail = await waitForMail(EMAIL, { mailUrl, count: before + 1 });
+  const mail = await nextMail(before);
   return /\d{6}/.exec(mail.subject)?.[0] ?? '';
 }
 
@@ -109,7 +116,7 @@ describe('an owner signs in without a script', () => {
     expect(sentTo(await owner.post('/sign-in/code', { intent: 'send again' }))).toBe(
       '/sign-in/code',
     );
-    const mail = await waitForMail(EMAIL, { mailUrl, count: before + 1 });
+    const mail = await nextMail(before);
     const second = /\d{6}/.exec(mail.subject)?.[0] ?? '';
     if (first !== second) {
       expect((await owner.post('/sign-in/code', { code: first, intent: 'sign in' })).status).toBe(
