@@ -9,6 +9,8 @@ import { startDatabase } from './database.ts';
 import type { Database, DatabaseOptions } from './database.ts';
 import { installFolder } from './database-folder.ts';
 import { freePort } from './ports.ts';
+import { startDatabaseProgram } from './stand-ins.ts';
+import { Supervisor } from './supervisor.ts';
 
 let template = '';
 let folder = '';
@@ -140,6 +142,23 @@ it('lets nobody in as root over the network, and the shop only into its own data
   asRoot.password = '';
   await expect(query(asRoot.href, 'SELECT 1')).rejects.toThrow(/Access denied/);
   await expect(query(url, 'SELECT * FROM mysql.global_priv')).rejects.toThrow(/denied/);
+});
+
+it('tells the one that watches over it when its server is lost', async () => {
+  const told = new Promise<string>((resolve) => {
+    const supervisor = new Supervisor(join(folder, 'logs'), (sentence) => {
+      resolve(sentence);
+      void supervisor.stop();
+    });
+    void startDatabaseProgram(supervisor, {
+      directory: join(folder, 'mariadb'),
+      port: 0,
+      user: 'a',
+      password: 'b',
+      name: 'c',
+    }).then(({ pid }) => process.kill(pid, 'SIGKILL'));
+  });
+  expect(await told).toBe('The database has ended by itself (1): MariaDB was ended from outside.');
 });
 
 it('ends when the process that started it is killed', async () => {

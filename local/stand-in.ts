@@ -6,6 +6,8 @@ import { sentenceFor } from '../scripts/sentences.mjs';
 export interface StandIn {
   /** Closes ports and files; resolves when nothing of it is left running. */
   stop: () => Promise<void>;
+  /** Resolves with a sentence when the part of it that does the work has ended by itself. */
+  lost?: Promise<string>;
 }
 
 /** What a stand-in's process tells the process that started it. */
@@ -27,6 +29,10 @@ export async function runAsProgram<Options>(
     const stop = () => void running.stop().then(() => process.exit(0));
     process.once('SIGTERM', stop);
     process.once('SIGINT', stop);
+    void running.lost?.then((sentence) => {
+      console.error(sentence);
+      process.exit(1);
+    });
     report({ ready: plain(running) });
   } catch (error) {
     const failed = sentenceFor(error);
@@ -37,8 +43,8 @@ export async function runAsProgram<Options>(
   }
 }
 
-const plain = (running: StandIn) =>
-  Object.fromEntries(Object.entries(running).filter(([, value]) => typeof value !== 'function'));
+const plain = ({ stop: _stop, lost: _lost, ...facts }: StandIn) =>
+  Object.fromEntries(Object.entries(facts).filter(([, value]) => typeof value !== 'function'));
 
 function report(message: Report) {
   process.send?.(message);

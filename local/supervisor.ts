@@ -97,7 +97,7 @@ export class Supervisor {
     void child.ended.then((how) => {
       if (this.stopping) return;
       const words = child.lastWords();
-      this.onLoss(`${child.name} has ended by itself (${how})${words ? `: ${words}` : ''}.`);
+      this.onLoss(`${child.name} has ended by itself (${how})${words ? `: ${words}` : '.'}`);
     });
   }
 }
