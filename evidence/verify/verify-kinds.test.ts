@@ -1,7 +1,7 @@
 import { describe, expect, test } from 'vitest';
 import { expectRefused, verdictOf } from '#tests/evidence/expect-verdict.ts';
 import { entryShown, tellCase } from '#tests/evidence/told-case.ts';
-import type { WitnessShop} from '#tests/evidence/witness-shop.ts';
+import type { WitnessShop } from '#tests/evidence/witness-shop.ts';
 import { CASE, type Sealed } from '#tests/evidence/witness-shop.ts';
 
 describe('rules of kinds', () => {

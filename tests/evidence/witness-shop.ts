@@ -19,6 +19,12 @@ import { writeConsistency } from '#evidence/proof/consistency-text.ts';
 import { writeTlogProof } from '#evidence/proof/tlog-proof.ts';
 import type { After, Visibility } from '#evidence/seal/header.ts';
 import type { Kind, PartName } from '#evidence/seal/kinds.ts';
+import { headerCommitment } from '#evidence/seal/header-commitment.ts';
+import { leafHash } from '#evidence/seal/leaf-hash.ts';
+import { logEntry } from '#evidence/seal/log-entry.ts';
+import { partCommitment } from '#evidence/seal/part-commitment.ts';
+import { slotTag } from '#evidence/seal/slot-tag.ts';
+import { sealJson } from '#evidence/json/seal-json.ts';
 import { writeEntry, type EntryToWrite, type WrittenEntry } from '#evidence/seal/write-entry.ts';
 import { writeEntryBundle } from '#evidence/tiles/entry-bundle.ts';
 
@@ -124,7 +130,50 @@ export class WitnessShop {
       return { n, original: toHex(original.salt), published: toHex(published.salt) };
     });
     const written = writeEntry(toWrite);
-    const sealed = { ...written, index: this.log.length, salt: toWrite.salt, photoSalts };
+    return this.push({ ...written, index: this.log.length, salt: toWrite.salt, photoSalts });
+  }
+
+  /**
+   * Appends what a newer program might have: a header with members changed, parts as given, and
+   * perhaps another first byte of the entry.
+   */
+  appendNewer(kind: string, change: object, parts: Record<string, object> = {}, firstByte = 2) {
+    const chain = this.chainOf(CASE);
+    this.time += 60_000;
+    const written = Object.entries(parts).map(([name, value]) => {
+      const [bytes, salt] = [sealJson(value), this.salt()];
+      return [name, { bytes, salt, commitment: partCommitment(name, salt, bytes) }] as const;
+    });
+    const header = {
+      ...chain[0]!.header,
+      kind,
+      seq: chain.length,
+      prev: toHex(chain.at(-1)!.commitment),
+      recordedAt: new Date(this.time).toISOString(),
+      parts: Object.fromEntries(written.map(([name, part]) => [name, toHex(part.commitment)])),
+      photos: [],
+      names: [],
+      ...change,
+    } as Sealed['header'];
+    const [salt, bytes] = [this.salt(), sealJson(header)];
+    const commitment = headerCommitment(salt, bytes);
+    const tag = slotTag(CASE, chain.length);
+    const entry = logEntry(tag, commitment).with(0, firstByte);
+    return this.push({
+      header: { ...header, case: toHex(CASE), seq: chain.length },
+      headerBytes: bytes,
+      parts: Object.fromEntries(written),
+      commitment,
+      tag,
+      entry,
+      leafHash: leafHash(entry),
+      index: this.log.length,
+      salt,
+      photoSalts: [],
+    });
+  }
+
+  private push(sealed: Sealed): Sealed {
     for (const node of nodesOfAppend(sealed.index, sealed.leafHash, this.read)) {
       this.nodes.set(`${node.level}/${node.index}`, node.hash);
     }
@@ -147,7 +196,7 @@ export class WitnessShop {
     return {
       header: fromUtf8(sealed.headerBytes),
       salt: toHex(sealed.salt),
-      parts: Object.fromEntries(parts.filter(([name]) => name === 'shown')),
+      parts: Object.fromEntries(parts.filter(([name]) => name === 'shown' || name === 'smell')),
       photos: sealed.photoSalts,
       proof: this.proof(sealed, checkpoint, size),
     };
