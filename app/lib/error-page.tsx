@@ -17,7 +17,7 @@ export function ErrorPage({ error }: { error: unknown }) {
   return (
     <main className="mx-auto grid max-w-[40rem] gap-6 px-6 py-12">
       <title>{`${title} · Witnessmark`}</title>
-      <Link to="/">
+      <Link to="/" className="text-ink">
         <Wordmark height={40} />
       </Link>
       <h1>{title}</h1>
