@@ -1,13 +1,12 @@
 import { z } from 'zod';
 import { Invalid } from './errors.ts';
 
-// Control characters hide in pasted text; a line break is the only one that means something.
-// eslint-disable-next-line no-control-regex
-const CONTROL =
-  /[\u0000-\u0009\u000b-\u001f\u007f-\u009f\u2028\u2029\u202a-\u202e\u2066-\u2069\ufeff]/g;
+// Control and direction characters hide in pasted text; a line break is the only one that means
+// something. Categories Cc and Zl, Zp, and the marks that turn the direction of what follows.
+const HIDDEN = /(?!\n)[\p{Cc}\p{Zl}\p{Zp}\u202a-\u202e\u2066-\u2069\ufeff]/gu;
 
 const tidy = (text: string) =>
-  text.normalize('NFC').replace(/\r\n?/g, '\n').replace(/\t/g, ' ').replace(CONTROL, '').trim();
+  text.normalize('NFC').replace(/\r\n?/g, '\n').replace(/\t/g, ' ').replace(HIDDEN, '').trim();
 
 const lengthOf = (text: string) => [...text].length;
 

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { Invalid } from './errors.ts';
+import type { Invalid } from './errors.ts';
 import { parseInput } from './input.ts';
 import { TakeInSchema } from './intake.ts';
 

@@ -77,7 +77,7 @@ const choice = <New extends z.ZodType, None = never>(
       if (wanted && !wanted(value)) return null as None;
       const schema = chosen(value) ? z.object({ id }) : fresh;
       const result = schema.safeParse(value ?? {});
-      if (result.success) return result.data as { id: string } | z.output<New>;
+      if (result.success) return result.data;
       for (const { path, message } of result.error.issues)
         context.addIssue({ code: 'custom', path, message });
       return z.NEVER;

@@ -13,7 +13,7 @@ function plant(root: Branch, path: string[], value: string): void {
     else if (!found) root.set(step, [value]);
     return;
   }
-  const next: Branch = found instanceof Map ? found : new Map();
+  const next = found instanceof Map ? found : new Map<string, Branch | string[]>();
   root.set(step, next);
   plant(next, rest, value);
 }
@@ -39,6 +39,11 @@ export function readForm(form: FormData): FormValues {
   for (const [name, value] of form)
     if (typeof value === 'string' && NAME.test(name)) plant(root, name.split('.'), value);
   return grown(root) as FormValues;
+}
+
+/** One text of a form; "" when it was not sent, or was no text. */
+export function textOf(value: unknown): string {
+  return typeof value === 'string' ? value : '';
 }
 
 /** The texts of a form by their names, to fill it in again after an error without a script. */

@@ -5,9 +5,9 @@ import type { Route } from './+types/add';
 import { viewerContext } from '#app/context.ts';
 import { fieldsOf } from '#app/lib/field-of.ts';
 import { refuse } from '#app/lib/problem.ts';
+import { textOf } from '#app/lib/read-form.ts';
 import { retry } from '#app/lib/retry.ts';
 import { AddHead } from '#app/ui/add/add-head.tsx';
-import { AddSheet } from '#app/ui/add/add-sheet.tsx';
 import { PhotoStrip } from '#app/ui/add/photo-strip.tsx';
 import { Button } from '#app/ui/control/button.tsx';
 import { useFirstWrongField } from '#app/ui/control/use-first-wrong-field.ts';
@@ -22,6 +22,8 @@ import { addEntry } from '#server/entries/add-entry.ts';
 import { listTimeline } from '#server/entries/list-timeline.ts';
 import { listCasePhotos } from '#server/photos/list-case-photos.ts';
 import { readShop } from '#server/shop/read-shop.ts';
+import { BesideTag } from './beside-tag.tsx';
+import { caseTagView } from './case-view.ts';
 import { EntryForm } from './entry-form.tsx';
 import { entryInput } from './entry-input.ts';
 import type { BenchHandle } from './layout.tsx';
@@ -53,6 +55,7 @@ export async function loader({ context, params: { number }, url }: Route.LoaderA
     entryId,
     loose: loosePhotos(viewer, photos),
     number,
+    tag: caseTagView(file, { now, zone }),
     title: `${file.ordinal}, ${file.kind}`,
     sub: `${file.maker}, ${file.owner}`,
     isClosed: file.closedAt !== null,
@@ -72,7 +75,7 @@ export async function action({ context, params, request }: Route.ActionArgs) {
   try {
     const { entryId } = await addEntry(context.get(viewerContext), {
       caseNumber: params.number,
-      entryId: String(form.get('entryId') ?? ''),
+      entryId: textOf(form.get('entryId')),
       ...entryInput(form),
     });
     return redirect(`/bench/cases/${params.number}?added=${entryId}#entry-${entryId}`);
@@ -92,7 +95,7 @@ export default function AddPage({ loaderData, actionData }: Route.ComponentProps
   const field = fieldsOf(actionData);
   const named = [...loaderData.loose, ...comingPhotos(photos, loaderData.loose)];
   return (
-    <AddSheet>
+    <BesideTag tag={loaderData.tag}>
       <title>{`Add to timeline, ${number} · Witnessmark`}</title>
       <AddHead
         title={what ? 'What it shows' : title}
@@ -160,6 +163,6 @@ export default function AddPage({ loaderData, actionData }: Route.ComponentProps
           </Button>
         </div>
       </Form>
-    </AddSheet>
+    </BesideTag>
   );
 }

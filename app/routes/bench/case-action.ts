@@ -1,5 +1,5 @@
 import { redirect } from 'react-router';
-import { readForm } from '#app/lib/read-form.ts';
+import { readForm, textOf } from '#app/lib/read-form.ts';
 import { Invalid } from '#domain/errors.ts';
 import type { Viewer } from '#domain/viewer.ts';
 import { recordProof } from '#server/cases/record-proof.ts';
@@ -27,7 +27,7 @@ export async function actOnCase(viewer: Viewer, caseNumber: string, form: FormDa
       await recordProof(viewer, input);
       return redirect(here);
     case 'amend': {
-      const made = await amendEntry(viewer, { caseNumber, entryId: String(entryId) });
+      const made = await amendEntry(viewer, { caseNumber, entryId: textOf(entryId) });
       return redirect(`${here}/entries/${made.entryId}`);
     }
     default:

@@ -1,4 +1,4 @@
-import { readForm, type FormValues } from '#app/lib/read-form.ts';
+import { readForm, textOf, type FormValues } from '#app/lib/read-form.ts';
 
 const list = <T>(value: T | T[] | undefined): T[] =>
   value === undefined ? [] : Array.isArray(value) ? value : [value];
@@ -15,7 +15,7 @@ export function entryInput(form: FormData) {
   return {
     phase,
     visibility,
-    draft: { ...branch(draft), used: String(used ?? '').split('\n') },
+    draft: { ...branch(draft), used: textOf(used).split('\n') },
     photos: list(photos as FormValues[] | undefined)
       .map(branch)
       .map(({ photoId, caption, bench }) => ({

@@ -6,7 +6,6 @@ import { fieldsOf } from '#app/lib/field-of.ts';
 import { refuse } from '#app/lib/problem.ts';
 import { retry } from '#app/lib/retry.ts';
 import { AddHead } from '#app/ui/add/add-head.tsx';
-import { AddSheet } from '#app/ui/add/add-sheet.tsx';
 import { Button, ButtonLink } from '#app/ui/control/button.tsx';
 import { useFirstWrongField } from '#app/ui/control/use-first-wrong-field.ts';
 import { Icon } from '#app/ui/icon.tsx';
@@ -23,6 +22,8 @@ import { listTimeline } from '#server/entries/list-timeline.ts';
 import { removeDraft } from '#server/entries/remove-draft.ts';
 import { sealEntry } from '#server/record/seal-entry.ts';
 import { readShop } from '#server/shop/read-shop.ts';
+import { BesideTag } from './beside-tag.tsx';
+import { caseTagView } from './case-view.ts';
 import { EntryForm } from './entry-form.tsx';
 import { entryInput } from './entry-input.ts';
 import { entryValues } from './entry-values.ts';
@@ -49,10 +50,13 @@ async function loadEntry(viewer: Viewer, number: string, entryId: string) {
   return {
     number,
     entryId,
+    tag: caseTagView(file, { now: new Date(), zone }),
     title: `${file.ordinal}, ${file.kind}`,
     values: entryValues(entry, (at) => clockIn(at, zone)),
     photos: entryPhotos(entry),
     missing: entry.expected.length,
+    preparing: entry.photos.filter(({ state }) => state === 'waiting').length,
+    version: file.version,
     shared: entry.visibility === 'shared',
     corrects: entry.corrects?.title ?? null,
     deskOnly: !may(viewer, 'add entry'),
@@ -104,7 +108,7 @@ export default function EntryPage({ loaderData, actionData }: Route.ComponentPro
   const values = actionData?.values['draft.title'] ? actionData.values : loaderData.values;
   const field = fieldsOf({ values, fields: actionData?.fields });
   return (
-    <AddSheet>
+    <BesideTag tag={loaderData.tag}>
       <title>{`${asks ? 'Seal' : 'Change'} an entry, ${number} · Witnessmark`}</title>
       <AddHead
         title={asks ? 'Seal the entry' : corrects ? 'Correction' : 'Change the entry'}
@@ -124,6 +128,8 @@ export default function EntryPage({ loaderData, actionData }: Route.ComponentPro
           shared={loaderData.shared}
           photos={loaderData.photos.length - loaderData.missing}
           missing={loaderData.missing}
+          preparing={loaderData.preparing}
+          changes={{ case: number, version: loaderData.version }}
           back={`${here}/entries/${entryId}`}
         />
       ) : (
@@ -163,7 +169,7 @@ export default function EntryPage({ loaderData, actionData }: Route.ComponentPro
           <RemoveAsk />
         </>
       )}
-    </AddSheet>
+    </BesideTag>
   );
 }
 

@@ -16,6 +16,10 @@ export interface NamedPhoto {
   leaveOut: string | null;
 }
 
+/** Its sizes are made after it is up: until then there is no small picture. */
+const thumbPath = ({ id, state }: Pick<CasePhoto, 'id' | 'state'>) =>
+  state === 'ready' ? mediaPath(id, 320) : null;
+
 /** Photos of the viewer's that are up but on no entry: sent before a page was loaded again. */
 export function loosePhotos(viewer: Viewer, photos: CasePhoto[]): NamedPhoto[] {
   const own = viewer.kind === 'staff' ? viewer.name : null;
@@ -23,9 +27,9 @@ export function loosePhotos(viewer: Viewer, photos: CasePhoto[]): NamedPhoto[] {
     .filter(
       ({ links, addedBy, state }) => links.length === 0 && addedBy === own && state !== 'failed',
     )
-    .map(({ id, n }) => ({
+    .map(({ id, n, state }) => ({
       ...{ id, name: `Photo ${n}`, caption: '', bench: false },
-      thumb: mediaPath(id, 320),
+      thumb: thumbPath({ id, state }),
       leaveOut: 'Not on this entry',
     }));
 }
@@ -33,8 +37,8 @@ export function loosePhotos(viewer: Viewer, photos: CasePhoto[]): NamedPhoto[] {
 /** The photos of a draft, up or expected. */
 export function entryPhotos({ photos, expected }: TimelineEntry): NamedPhoto[] {
   return [
-    ...photos.map(({ id, n, caption, visibility }) => ({
-      ...{ id, caption, name: `Photo ${n}`, thumb: mediaPath(id, 320) },
+    ...photos.map(({ id, n, caption, visibility, state }) => ({
+      ...{ id, caption, name: `Photo ${n}`, thumb: thumbPath({ id, state }) },
       bench: visibility === 'bench',
       leaveOut: 'Take it off',
     })),

@@ -23,7 +23,7 @@ export function PhotoWords({ photos, field }: { photos: NamedPhoto[]; field: Fie
           </span>
           <div className="grid gap-2">
             <TextField
-              label={photo.name}
+              label={`${photo.name} shows`}
               help={index === 0 ? 'What is to be seen and where.' : undefined}
               maxLength={400}
               {...field(`photos.${index}.caption`, photo.caption)}

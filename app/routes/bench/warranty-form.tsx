@@ -38,6 +38,11 @@ function Line({ line, text, personId, ticked, people, error }: LineProps) {
   const what = line === 'own' ? 'A line of your own' : `Line ${Number(line) + 1}`;
   return (
     <li className="flex flex-wrap items-center gap-3 border-t border-line py-2">
+      {line === 'own' && (
+        <span className="basis-full text-label text-ink-3">
+          A line of your own, if one is missing
+        </span>
+      )}
       <label className="flex min-h-11 items-center gap-2">
         <input type="checkbox" name="line" value={line} defaultChecked={ticked} />
         <span className="sr-only">{what}: covered</span>
