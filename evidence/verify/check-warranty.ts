@@ -35,6 +35,10 @@ export function checkWarranty(work: Work): Warranty | null {
         return null;
       }
       if (!leaf) throw new ShapeError('No entry of the record holds this credential.');
+      const [first] = chain;
+      if (first!.seq > 0 && first!.commitment !== leaf.header!.names[0]) {
+        throw new ShapeError('The record does not begin at the close its warranty names.');
+      }
       return { leaf, credential: checkCredential(work, jws, leaf) };
     }) ?? null
   );

@@ -108,7 +108,8 @@ function loggedAs(item: BundleEntry | LostEntry, slot: Slot): Logged {
 export function splitChains(items: Item[], findings: Findings): { own: Item[]; chain: Item[] } {
   const own = items.filter((item) => item.case === LOG_CASE);
   const chain = items.filter((item) => item.case !== LOG_CASE);
-  const misplaced = items.find((item, at) => item !== [...own, ...chain][at]);
+  const ordered = [...own, ...chain];
+  const misplaced = items.find((item, at) => item !== ordered[at]);
   if (misplaced) findings.failed('own-chain', { ...placeOf(misplaced), because: 'out of order' });
   if (new Set(chain.map((item) => item.case)).size > 1) {
     findings.failed('case-chain', { because: 'entries of two cases' });

@@ -70,7 +70,7 @@ export function verifyBundle(text: string, outside: Outside = {}): Report {
   checkWhoseKey(work);
   checkPaper(work, warranty);
   checkLaterEntries(work, standing);
-  countUnbracketed(work, new Map());
+  countUnbracketed(work);
   countKeptBack(work);
   return report(findings, standing, readRecord(work, warranty));
 }

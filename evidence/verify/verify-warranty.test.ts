@@ -21,6 +21,16 @@ describe('the warranty', () => {
     expectRefused(bundle, 'warranty');
   });
 
+  test('a record that begins at another close than the one its warranty names', () => {
+    const sealed = tellCase();
+    const { shop } = sealed;
+    const shown = { v: 1, text: '', entries: 6, photos: 4 };
+    const later = shop.append('close', CASE, { names: shop.chainOf(CASE), parts: { shown } });
+    const again = { ...sealed, closed: later, ...warrant(shop, later, { name: 'again' }) };
+    expectOpen(warrantyBundle(again), 'unknown-member');
+    expectRefused(warrantyBundle({ ...again, closed: sealed.closed }), 'warranty');
+  });
+
   test('a member nobody knows keeps it from being fully checked, a refused one does not match', () => {
     const unknown = tellCase();
     const sealed = { ...unknown, ...warrant(unknown.shop, unknown.closed, { evidence: [] }) };
