@@ -62,11 +62,19 @@ async function leave(supervisor: Supervisor, code: number): Promise<void> {
   process.exit(code);
 }
 
-/** A first signal stops everything in order; a second one ends everything at once. */
+// One Ctrl-C arrives twice: from the terminal, and passed on by npm.
+const sameSignal = 2_000;
+let firstSignal = Infinity;
+
+/** A first signal stops everything in order; a later one ends everything at once. */
 function onSignal(supervisor: Supervisor): void {
-  if (!leaving) return void leave(supervisor, 0);
-  supervisor.kill();
-  process.exit(1);
+  if (!leaving) {
+    firstSignal = performance.now();
+    void leave(supervisor, 0);
+  } else if (performance.now() - firstSignal > sameSignal) {
+    supervisor.kill();
+    process.exit(1);
+  }
 }
 
 try {
