@@ -12,7 +12,9 @@ const realPhotos = 'tests/outside/photos/real-photos.test.ts';
 // This file is read once per project, and it need only be said once.
 if (!withRealPhotos && !process.env.REAL_PHOTOS_SAID) {
   process.env.REAL_PHOTOS_SAID = '1';
-  console.log(`Not run: ${realPhotos}. Set WITNESSMARK_REAL_PHOTOS to a folder of photographs.`);
+  console.log(
+    'Not run: what photographs of real cameras do. Set WITNESSMARK_REAL_PHOTOS to a folder of them.',
+  );
 }
 
 export default defineConfig({

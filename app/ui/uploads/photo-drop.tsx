@@ -87,7 +87,9 @@ export function PhotoDrop({ caseNumber, entryId, onPhotos }: Props) {
               multiple: true,
               'aria-label': 'Choose photos',
               className: hydrated ? 'sr-only' : '',
+              // The button beside it opens it then.
               tabIndex: hydrated ? -1 : 0,
+              'aria-hidden': hydrated,
               style: {},
             })}
           />
