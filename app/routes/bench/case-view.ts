@@ -95,7 +95,10 @@ function estimateFact({ estimate }: CaseFile, { zone }: Sight) {
 
 function portalFact(timeline: TimelineEntry[]) {
   const shown = timeline.filter(({ seal, visibility }) => seal && visibility === 'shared').length;
-  const note = shown === 0 ? 'nothing is sealed yet' : `shows the ${shown} sealed entries`;
+  const note =
+    shown === 0
+      ? 'nothing is sealed yet'
+      : `shows ${counted(shown, 'sealed entry', 'sealed entries')}`;
   return { label: 'Portal', value: 'Open to the owner', note };
 }
 

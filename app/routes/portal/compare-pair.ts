@@ -8,9 +8,19 @@ export interface Placed {
 
 const isUpright = ({ photo: { width, height } }: Placed) => height > width;
 
+// Short words join; the longer ones say what is to be seen.
+const wordsOf = ({ photo: { caption } }: Placed) =>
+  new Set(caption.toLowerCase().match(/\p{L}{4,}/gu) ?? []);
+
+const shared = (a: Placed, b: Placed) => {
+  const words = wordsOf(b);
+  return [...wordsOf(a)].filter((word) => words.has(word)).length;
+};
+
 /**
- * A before and an after photo to lay side by side: the latest after photo and the first before photo of
- * the same shape. It is an offer to look, and says nothing about what the two show. Null without both.
+ * A before and an after photo to lay side by side: the latest after photo, and of the before photos of
+ * the same shape the one whose caption shares most words with it, the first of equals. It is an offer
+ * to look, and says nothing about what the two show. Null without both.
  */
 export function comparePair(timeline: TimelineEntry[]): { before: Placed; after: Placed } | null {
   const of = (phase: TimelineEntry['phase']) =>
@@ -19,6 +29,12 @@ export function comparePair(timeline: TimelineEntry[]): { before: Placed; after:
       .flatMap((entry) => entry.photos.map((photo) => ({ photo, entry })))
       .filter(({ photo }) => photo.state === 'ready');
   const after = of('after').at(-1);
-  const before = after && of('before').find((one) => isUpright(one) === isUpright(after));
+  if (!after) return null;
+  const before = of('before')
+    .filter((one) => isUpright(one) === isUpright(after))
+    .reduce<Placed | null>(
+      (best, one) => (best && shared(best, after) >= shared(one, after) ? best : one),
+      null,
+    );
   return before ? { before, after } : null;
 }
