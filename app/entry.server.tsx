@@ -50,7 +50,7 @@ export default function handleRequest(
         [wholeFirst ? 'onAllReady' : 'onShellReady']: send,
         onShellError(error: unknown) {
           clearTimeout(timer);
-          reject(error as Error);
+          reject(error);
         },
         onError(error: unknown) {
           rendered = 500;

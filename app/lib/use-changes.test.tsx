@@ -19,7 +19,7 @@ beforeEach(() => {
   [version, loads, asked, visible] = ['1', 0, [], 'visible'];
   answer = () => Response.json({ version });
   vi.spyOn(globalThis, 'fetch').mockImplementation((path) => {
-    asked.push(String(path));
+    asked.push(path as string);
     return Promise.resolve().then(answer);
   });
   vi.spyOn(document, 'visibilityState', 'get').mockImplementation(() => visible);
