@@ -203,12 +203,6 @@ export interface RailView {
   tags: RackTagView[];
 }
 
-export interface TrayPartView {
-  name: string;
-  /** "bone, in the tray", "put back 15 April" */
-  place: string;
-}
-
 export interface WhatIsNextView {
   rest?: RestNextView;
   /** Under the rest: "Bridge, hot hide glue. May carry strings Fri 17 April, 09:40." */

@@ -15,6 +15,7 @@ import { ButtonLink } from '#app/ui/control/button.tsx';
 import { Notice } from '#app/ui/notice.tsx';
 import { Tag } from '#app/ui/tag/tag.tsx';
 import { Timeline } from '#app/ui/timeline/timeline.tsx';
+import { useRunningHead } from '#app/ui/use-running-head.ts';
 import { actOnCase } from './case-action.ts';
 import { CaseActs } from './case-acts.tsx';
 import { loadCase } from './case-loader.ts';
@@ -50,6 +51,7 @@ export default function CaseFilePage({ loaderData, actionData }: Route.Component
   const [search] = useSearchParams();
   const navigate = useNavigate();
   useChanges({ case: number, version: loaderData.version });
+  useRunningHead(loaderData.heading);
   useLatestEntry(loaderData.isOpen, loaderData.latest);
   const here = `/bench/cases/${number}`;
   const add = (big: boolean) => (

@@ -5,22 +5,18 @@ interface Props {
   /** "Case file 2026-031, parlour guitar by Aldous Pike": the page's heading, for those who do not see the tag. */
   heading: string;
   tag: ReactNode;
-  tray?: ReactNode;
   next: ReactNode;
   /** Tabs and what they show. */
   children: ReactNode;
 }
 
-/** A case file: tag and tray, timeline, what is next. The phone has them below each other. */
-export function CasePage({ heading, tag, tray, next, children }: Props) {
+/** A case file: tag, timeline, what is next. The phone has them below each other. */
+export function CasePage({ heading, tag, next, children }: Props) {
   return (
     <main className="case-page" aria-label="Case file">
       <h1 className="sr-only">{heading}</h1>
       <div className="case-left">
-        <div>
-          {tag}
-          {tray && <div className="case-tray">{tray}</div>}
-        </div>
+        <div>{tag}</div>
       </div>
       <div className="case-middle">{children}</div>
       <div className="case-next">{next}</div>
