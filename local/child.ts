@@ -26,7 +26,7 @@ export interface Child {
   /** Resolves when it has ended, with how: an exit code or the name of a signal. */
   ended: Promise<number | string>;
   isOver: () => boolean;
-  /** The last line it wrote to standard error. */
+  /** The last lines it wrote to standard error. */
   lastWords: () => string;
 }
 
@@ -73,7 +73,7 @@ export function startChild({
     ),
     ended,
     isOver: () => over,
-    lastWords: () => words.trim().split('\n').at(-1) ?? '',
+    lastWords: () => words.trim(),
   };
 }
 

@@ -4,7 +4,7 @@ import { mkdir, rename, rm } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { basename, dirname, join } from 'node:path';
 import { promisify } from 'node:util';
-import { Failure, sentenceForOutput } from '../scripts/sentences.mjs';
+import { Failure, sentenceForFullDisk } from '../scripts/sentences.mjs';
 
 // sun_path of a Unix socket address, without the closing zero byte (unix(7)).
 const longestSocketPath = 107;
@@ -64,7 +64,7 @@ export async function installFolder(directory: string): Promise<void> {
     throw new Failure(
       error.code === 'ENOENT'
         ? 'MariaDB is not installed. Run: apt-get install -y mariadb-server-core mariadb-client-core'
-        : (sentenceForOutput(said, 'MariaDB') ??
+        : (sentenceForFullDisk(said) ??
             `MariaDB could not make its data folder: ${said.trim().split('\n').at(-1)}`),
     );
   });

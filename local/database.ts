@@ -4,7 +4,7 @@ import { resolve } from 'node:path';
 import { setTimeout as wait } from 'node:timers/promises';
 import { createConnection } from 'mariadb';
 import type { Connection } from 'mariadb';
-import { Failure, sentenceForOutput } from '../scripts/sentences.mjs';
+import { Failure, sentenceForFullDisk } from '../scripts/sentences.mjs';
 import {
   asUser,
   installFolder,
@@ -136,9 +136,7 @@ async function connectWhenReady(server: Server): Promise<Connection> {
   await stop(server);
   const said = server.said();
   const lastError = said.split('\n').findLast((line) => line.includes('[ERROR]')) ?? said;
-  throw new Failure(
-    sentenceForOutput(said, 'MariaDB') ?? `The database did not start: ${lastError.trim()}`,
-  );
+  throw new Failure(sentenceForFullDisk(said) ?? `The database did not start: ${lastError.trim()}`);
 }
 
 async function prepare(root: Connection, { user, password, name }: DatabaseOptions) {

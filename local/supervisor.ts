@@ -1,7 +1,7 @@
 import { mkdirSync } from 'node:fs';
 import { join } from 'node:path';
 import { setTimeout as wait } from 'node:timers/promises';
-import { Failure } from '../scripts/sentences.mjs';
+import { Failure, sentenceForFullDisk } from '../scripts/sentences.mjs';
 import { killGroup, startChild, stopChild } from './child.ts';
 import type { Child, Program } from './child.ts';
 
@@ -90,13 +90,15 @@ export class Supervisor {
   private failure(child: Child, how: number | string): Failure {
     if (this.stopping) return new Failure('Stopped.');
     const words = child.lastWords();
-    return new Failure(words || `${child.name} did not start (${how}).`);
+    const known = sentenceForFullDisk(words);
+    const last = words.split('\n').at(-1);
+    return new Failure(known ?? (last || `${child.name} did not start (${how}).`));
   }
 
   private watch(child: Child) {
     void child.ended.then((how) => {
       if (this.stopping) return;
-      const words = child.lastWords();
+      const words = child.lastWords().split('\n').at(-1);
       this.onLoss(`${child.name} has ended by itself (${how})${words ? `: ${words}` : '.'}`);
     });
   }

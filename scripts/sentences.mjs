@@ -7,7 +7,7 @@
 export class Failure extends Error {}
 
 const diskFull =
-  /ENOSPC|No space left on device|enough free space|Errcode: 28\b|error(?: number)? 28\b/;
+  /ENOSPC|No space left on device|enough free space|No more room in record file|The table '[^']*' is full|Errcode: 28\b|error(?: number)? 28\b/;
 const noNetwork =
   /EAI_AGAIN|ENOTFOUND|ENETUNREACH|EHOSTUNREACH|ETIMEDOUT|ECONNREFUSED|ECONNRESET|Temporary failure resolving|Could not resolve|Could not connect|Failed to fetch|Unable to fetch/;
 
@@ -22,6 +22,15 @@ export function sentenceForOutput(output, what) {
   if (noNetwork.test(output))
     return `${what} could not be fetched. Check the network, then run the same command again.`;
   return undefined;
+}
+
+/**
+ * The sentence for a full disk when that is what a program complained of, otherwise undefined.
+ * @param {string} output everything the program wrote
+ * @returns {string | undefined}
+ */
+export function sentenceForFullDisk(output) {
+  return diskFull.test(output) ? diskFullSentence() : undefined;
 }
 
 /** @returns {string} */

@@ -12,6 +12,7 @@ describe('sentenceForOutput', () => {
     ['npm warn tar TAR_ENTRY_ERROR ENOSPC: no space left on device, write', full],
     ["E: You don't have enough free space in /var/cache/apt/archives/.", full],
     ['[ERROR] InnoDB: preallocating 12582912 bytes for file ./ibdata1 failed with error 28', full],
+    ['Can\'t create table `a`.`rests` (errno: 135 "No more room in record file")', full],
     ['npm error code ECONNREFUSED\nnpm error syscall connect', noNetwork],
     ['npm error code ENOTFOUND\nnpm error syscall getaddrinfo', noNetwork],
     [
