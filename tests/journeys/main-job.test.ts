@@ -52,7 +52,8 @@ async function photograph(page: Page, number: string, onPhone: boolean): Promise
 async function sealAll(page: Page, number: string): Promise<void> {
   const here = new RegExp(`/bench/cases/${number}(?:[?#].*)?$`);
   for (;;) {
-    await page.goto(`${app.url}/bench/cases/${number}`);
+    // An open case scrolls to its latest entry once its script runs: a click before that would miss.
+    await page.goto(`${app.url}/bench/cases/${number}`, { waitUntil: 'networkidle' });
     const open = page.locator('main').getByRole('link', { name: 'Seal it' });
     if ((await open.count()) === 0) return;
     await open.first().click();
