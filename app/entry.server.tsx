@@ -48,9 +48,9 @@ export default function handleRequest(
       {
         nonce,
         [wholeFirst ? 'onAllReady' : 'onShellReady']: send,
-        onShellError(error: unknown) {
+        onShellError(error) {
           clearTimeout(timer);
-          reject(error);
+          reject(error instanceof Error ? error : new Error('a page threw what is no error'));
         },
         onError(error: unknown) {
           rendered = 500;
