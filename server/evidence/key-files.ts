@@ -57,7 +57,9 @@ export function readKeyFile(use: KeyUse, id: string): KeyFile {
     pem = readFileSync(path, 'utf8');
   } catch (error) {
     if ((error as NodeJS.ErrnoException).code !== 'ENOENT') throw error;
-    throw new Error(`The private ${use} key is missing. Put ${path} back from its copy.`);
+    throw new Error(`The private ${use} key is missing. Put ${path} back from its copy.`, {
+      cause: error,
+    });
   }
   const read = keyFile(createPrivateKey(pem));
   if (read.id !== id) throw new Error(`${path} holds another key. Put the right one back.`);

@@ -1,9 +1,9 @@
-import { setTimeout as wait } from 'node:timers/promises';
 import type { StandingWord } from '#evidence/standing/standing-shape.ts';
 import { currentKey } from '#server/evidence/current-key.ts';
 import { newestHead } from '#server/evidence/newest-checkpoint.ts';
 import { select } from '#server/db/sql.ts';
 import { readShop } from '#server/shop/read-shop.ts';
+import { noSoonerThan } from './no-sooner-than.ts';
 import { countNumber } from './number-limit.ts';
 import { sealedWarranty, type SealedWarranty } from './sealed-warranty.ts';
 import { standingUnder } from './standing.ts';
@@ -72,8 +72,7 @@ export async function knownNumber(
   { now = new Date() }: { now?: Date } = {},
 ): Promise<KnownNumber | null> {
   await countNumber(ip);
-  const [known] = await Promise.all([know(code, now), wait(LEAST_MS)]);
-  return known;
+  return noSoonerThan(LEAST_MS, know(code, now));
 }
 
 /** The shop's name and zone, for the page that answers. */

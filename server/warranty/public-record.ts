@@ -1,6 +1,6 @@
-import { setTimeout as wait } from 'node:timers/promises';
 import { newestHead } from '#server/evidence/newest-checkpoint.ts';
 import { unsafeIssued } from './known-number.ts';
+import { noSoonerThan } from './no-sooner-than.ts';
 import { countNumber } from './number-limit.ts';
 import { warrantyBundle } from './warranty-bundle.ts';
 
@@ -31,6 +31,5 @@ export async function publicRecord(
   { now = new Date() }: { now?: Date } = {},
 ): Promise<PublicRecord | null> {
   await countNumber(ip);
-  const [record] = await Promise.all([build(code, now), wait(LEAST_MS)]);
-  return record;
+  return noSoonerThan(LEAST_MS, build(code, now));
 }

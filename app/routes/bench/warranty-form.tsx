@@ -7,8 +7,11 @@ import type { DrawnView } from './warranty-view.ts';
 
 /** The lines that are ticked, with the months, as the form sends them. */
 export function issueInput(form: FormData) {
-  const text = (name: string) => String(form.get(name) ?? '');
-  const lines = form.getAll('line').map(String);
+  const text = (name: string) => {
+    const value = form.get(name);
+    return typeof value === 'string' ? value : '';
+  };
+  const lines = form.getAll('line').filter((line) => typeof line === 'string');
   return {
     months: text('months'),
     work: lines.flatMap((line) =>

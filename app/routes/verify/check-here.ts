@@ -7,6 +7,7 @@ import { sha256 } from '#evidence/bytes/sha256.ts';
 import { CodeError } from '#evidence/errors.ts';
 import { comparePaper, type PaperMatch } from '#evidence/verify/compare-paper.ts';
 import { verifyBundle, type Report } from '#evidence/verify/verify-bundle.ts';
+import type { Outside } from '#evidence/verify/work.ts';
 import type { StandingReport } from '#evidence/verify/check-standing.ts';
 import { fetchRecord } from './fetch-record.ts';
 import { findBundle } from './find-bundle.ts';
@@ -26,6 +27,8 @@ export interface Held {
 export interface Checked extends Judgement {
   rows: CheckRowView[];
   standing: StandingReport;
+  /** Whether the shop's record agrees with itself, whatever is held against it. */
+  recordHolds: boolean;
   /** What the checked credential says; null where it is not shown. */
   subject: { instrument: string; work: string; term: string; validUntil: string } | null;
   sealValue: string | null;
@@ -83,6 +86,16 @@ function readQr(fragment: string) {
   }
 }
 
+function qrRows(qr: ReturnType<typeof readQr>, strangeKey: boolean): CheckRowView[] {
+  if (qr instanceof CodeError) {
+    return [{ held: 'QR code', result: 'open', word: 'Not read', note: qr.message }];
+  }
+  const note = 'this address does not publish it';
+  return strangeKey
+    ? [{ held: 'Key in the QR code', result: 'bad', word: 'Does not match', note }]
+    : [];
+}
+
 /** The record in the paper says more than the shop lets out: its credential is held against the log. */
 function withCredential(bundle: string, paperBundle: string | null): string {
   if (paperBundle === null) return bundle;
@@ -121,45 +134,41 @@ export async function checkHere(
   const qr = readQr(fragment);
   const scanned = qr !== null && !(qr instanceof CodeError);
   const paperBundle = paper && findBundle(paper.bytes);
-  const report = verifyBundle(withCredential(answer.bundle, paperBundle), {
+  const outside: Outside = {
     ...(answer.logKeyId === null
       ? {}
       : { logKeyId: answer.logKeyId, logKeyFrom: 'address', address: host }),
-    ...(scanned ? { seal16: qr.seal16 } : {}),
     ...(answer.entries ? { publicEntries: answer.entries } : {}),
+  };
+  // First the record alone: that a paper does not fit it says nothing against the record.
+  const record = verifyBundle(answer.bundle, outside);
+  const report = verifyBundle(withCredential(answer.bundle, paperBundle), {
+    ...outside,
+    ...(scanned ? { seal16: qr.seal16 } : {}),
     code,
   });
+  const shown = report.record ? report : record;
   const match =
-    paper && (report.record ? comparePaper(paper.bytes, report.record) : 'no-paper-named');
-  const sameWarranty = isSameWarranty(paperBundle, report);
+    paper && (shown.record ? comparePaper(paper.bytes, shown.record) : 'no-paper-named');
+  const sameWarranty = isSameWarranty(paperBundle, shown);
   const strangeKey = scanned && !answer.logKeyIds.includes(qr.logKeyId);
-  const held = { paper: match, sameWarranty, scanned, strangeKey };
-  const credential = report.record?.credential ?? null;
+  const recordHolds = record.verdict !== 'Does not match';
+  const held = { paper: match, sameWarranty, scanned, strangeKey, recordHolds };
+  const credential = shown.record?.credential ?? null;
   return {
-    ...judge(report, held, { shop, sealedOn: sealedOn(report, zone) }),
+    ...judge(report, held, { shop, sealedOn: sealedOn(shown, zone) }),
     rows: [
       ...(paper && match ? [paperRow(paper, match, sameWarranty)] : []),
-      ...(qr instanceof CodeError
-        ? [{ held: 'QR code', result: 'open' as const, word: 'Not read', note: qr.message }]
-        : []),
-      ...(strangeKey
-        ? [
-            {
-              held: 'Key in the QR code',
-              result: 'bad' as const,
-              word: 'Does not match',
-              note: 'this address does not publish it',
-            },
-          ]
-        : []),
-      ...(match === 'this-file' ? [] : compareRows(report)),
+      ...qrRows(qr, strangeKey),
+      ...(match === 'this-file' ? [] : compareRows(shown)),
       ...findingRows(report.findings),
     ],
-    standing: report.standing,
+    standing: shown.standing,
+    recordHolds,
     subject: credential && {
       ...credential.credentialSubject,
       validUntil: dateYear(new Date(credential.validUntil), zone),
     },
-    sealValue: report.record?.sealValue ?? null,
+    sealValue: shown.record?.sealValue ?? null,
   };
 }

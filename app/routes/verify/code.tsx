@@ -87,11 +87,15 @@ function useCheck({ code, shop, zone }: View, paper: HeldPaper | null): State {
 }
 
 export default function VerifyCodePage({ loaderData }: Route.ComponentProps) {
-  const [paper, setPaper] = useState<HeldPaper | null>(null);
-  useEffect(() => setPaper(takePaper()), []);
+  // Another number begins anew, with no file in hand but one that was dropped for it.
+  return <Answer key={loaderData.number} loaderData={loaderData} />;
+}
+
+function Answer({ loaderData }: { loaderData: View }) {
+  const [paper, setPaper] = useState<HeldPaper | null>(takePaper);
   const state = useCheck(loaderData, paper);
   const ask = (
-    <VerifyAsk action="/verify" number={loaderData.number} key={loaderData.number}>
+    <VerifyAsk action="/verify" number={loaderData.number}>
       <PaperDrop name={paper?.name ?? null} onPaper={setPaper} />
     </VerifyAsk>
   );

@@ -13,6 +13,8 @@ export interface HeldFacts {
   scanned: boolean;
   /** The QR code names a log key that this address does not publish. */
   strangeKey: boolean;
+  /** Whether the shop's record agrees with itself, before anything is held against it. */
+  recordHolds: boolean;
 }
 
 /** A verdict with what it means here. */
@@ -21,14 +23,12 @@ export interface Judgement {
   sentence: string;
 }
 
-const OF_THE_PAPER = new Set(['paper-seal', 'code']);
-
-function mismatch({ findings }: Report): Judgement {
-  const failed = findings.filter(({ outcome }) => outcome === 'failed');
-  const record = failed.find(({ id }) => !OF_THE_PAPER.has(id));
-  const sentence = record
-    ? `The shop’s record does not agree with itself. ${sentenceOf(record)} Do not rely on it.`
-    : 'What you hold is not what this shop sealed under this number. Do not rely on it; ask the shop.';
+function mismatch({ findings }: Report, recordHolds: boolean): Judgement {
+  const failed = findings.find(({ outcome }) => outcome === 'failed');
+  const why = failed ? `${sentenceOf(failed)} ` : '';
+  const sentence = recordHolds
+    ? 'What you hold is not what this shop sealed under this number. Do not rely on it; ask the shop.'
+    : `The shop’s record does not agree with itself. ${why}Do not rely on it.`;
   return { kind: 'does-not-match', sentence };
 }
 
@@ -72,7 +72,7 @@ export function judge(
   held: HeldFacts,
   { shop, sealedOn }: { shop: string; sealedOn: string | null },
 ): Judgement {
-  if (report.verdict === 'Does not match') return mismatch(report);
+  if (report.verdict === 'Does not match') return mismatch(report, held.recordHolds);
   if (held.strangeKey) {
     const sentence =
       'The QR code names a key that this shop does not publish here. Do not rely on the paper.';

@@ -73,7 +73,9 @@ export default function LogPage({ loaderData }: Route.ComponentProps) {
               <a href="/api/log/checkpoint">the head as it was signed</a>,{' '}
               <a href="/api/log/entries">all entries up to it</a>.
             </p>
-            <pre className="mt-3 overflow-x-auto bg-well p-4 text-micro">{head.note}</pre>
+            <pre className="mt-3 bg-well p-4 text-micro break-all whitespace-pre-wrap">
+              {head.note}
+            </pre>
           </>
         ) : (
           <p className="mt-2">No head is signed yet. Look again in a minute.</p>

@@ -1,6 +1,11 @@
+import { useSyncExternalStore } from 'react';
 import { useDropzone } from 'react-dropzone';
+import { Button } from '#app/ui/control/button.tsx';
 import { DropArea } from '#app/ui/drop-area.tsx';
 import type { HeldPaper } from './held-paper.ts';
+
+/** Whether a script runs does not change while the page is open. */
+const nothingChanges = () => () => undefined;
 
 interface Props {
   /** The file in hand. */
@@ -11,6 +16,11 @@ interface Props {
 
 /** The place to drop a paper on. The file is read here and not sent. */
 export function PaperDrop({ name, onPaper, big = false }: Props) {
+  const ready = useSyncExternalStore(
+    nothingChanges,
+    () => true,
+    () => false,
+  );
   const { getRootProps, getInputProps, isDragActive, open } = useDropzone({
     multiple: false,
     noClick: true,
@@ -23,18 +33,30 @@ export function PaperDrop({ name, onPaper, big = false }: Props) {
       });
     },
   });
+  const className = big ? 'min-h-26' : '';
+  if (!ready) {
+    return (
+      <DropArea
+        title="The PDF can be checked here too"
+        sub="that needs JavaScript: the file is read in your browser and not sent"
+        className={className}
+      />
+    );
+  }
   return (
     <DropArea
       {...getRootProps()}
       title={name ?? 'Drop the PDF here'}
       sub="checked here, not sent"
       over={isDragActive}
-      className={big ? 'min-h-26' : ''}
+      className={className}
     >
       <input {...getInputProps()} aria-label="The PDF of the warranty" />
-      <button type="button" className="link ml-auto min-h-11 whitespace-nowrap" onClick={open}>
-        {name === null ? 'Choose a file' : 'Check another'}
-      </button>
+      <span className="ml-auto whitespace-nowrap">
+        <Button kind="text" type="button" onClick={open}>
+          {name === null ? 'Choose a file' : 'Check another'}
+        </Button>
+      </span>
     </DropArea>
   );
 }

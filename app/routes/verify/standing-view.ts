@@ -28,17 +28,24 @@ export function standingView(word: StandingWord, until: string, small: string): 
 const NOT_STATED =
   'What the warranty is now is not stated here: the shop’s signed word is missing or does not fit the record.';
 
-/** The standing after a check: the shop's signed word, or that there is none that holds. */
+/**
+ * The standing after a check: the shop's signed word; where the record is given out without its
+ * credential, what the shop says, called unchecked; and none where the record itself does not hold.
+ */
 export function checkedStanding(
-  { standing, kind }: Checked,
+  { standing, kind, recordHolds, subject }: Checked,
   known: KnownView,
   zone: string,
 ): { shown: StandingView | null; missing: string | null } {
   const { word, at } = standing;
-  if (word === 'not stated here' || at === null) return { shown: null, missing: NOT_STATED };
-  const signed = dateYearTime(new Date(at), zone);
-  const small = `Signed by the shop ${signed}; the signature was checked here. It may change; what was checked cannot.`;
-  const shown = standingView(word, known.until, small);
-  const label = { label: 'Standing of the paper the shop issued' };
-  return { shown: kind === 'does-not-match' ? { ...shown, ...label } : shown, missing: null };
+  const ofPaper =
+    kind === 'does-not-match' ? { label: 'Standing of the paper the shop issued' } : {};
+  if (word !== 'not stated here' && at !== null) {
+    const signed = dateYearTime(new Date(at), zone);
+    const small = `Signed by the shop ${signed}; the signature was checked here. It may change; what was checked cannot.`;
+    return { shown: { ...standingView(word, known.until, small), ...ofPaper }, missing: null };
+  }
+  if (!recordHolds || subject) return { shown: null, missing: NOT_STATED };
+  const small = `${known.standing.small} That needs the record in the PDF.`;
+  return { shown: { ...known.standing, ...ofPaper, small }, missing: null };
 }

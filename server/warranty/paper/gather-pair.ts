@@ -1,6 +1,7 @@
 import { buffer } from 'node:stream/consumers';
-import { Jimp } from 'jimp';
+import { defaultFormats } from 'jimp';
 import { dayIn } from '#domain/calendar.ts';
+import type { Pixels } from '#server/images/pixels.ts';
 import { decodeWebp } from '#server/images/webp-codec.ts';
 import { getStream } from '#server/storage/objects.ts';
 import { dayInWords } from '../words.ts';
@@ -10,6 +11,19 @@ import { pickPair } from './pick-pair.ts';
 
 const QUALITY = 88;
 
+/** jimp's own JPEG format; its table of formats gives each a type of its own. */
+type Encoder = {
+  mime: string;
+  encode(pixels: Pixels, options: { quality: number }): Promise<Buffer> | Buffer;
+};
+
+function jpegOf(pixels: Pixels): Promise<Buffer> | Buffer {
+  const formats = defaultFormats.map((make) => make() as unknown as Encoder);
+  const format = formats.find(({ mime }) => mime === 'image/jpeg');
+  if (!format) throw new Error('jimp does not write JPEG.');
+  return format.encode(pixels, { quality: QUALITY });
+}
+
 /** A PDF takes JPEG, the copies are WebP. */
 async function picture(
   { objectKey, caption, at }: SealedPhoto,
@@ -17,9 +31,7 @@ async function picture(
 ): Promise<PaperPicture> {
   const file = await getStream(objectKey);
   if (!file) throw new Error('A photo’s copy is not in the store. Run npm run log:check.');
-  const jpeg = await Jimp.fromBitmap(await decodeWebp(await buffer(file))).getBuffer('image/jpeg', {
-    quality: QUALITY,
-  });
+  const jpeg = await jpegOf(await decodeWebp(await buffer(file)));
   const day = dayInWords(dayIn(at, zone)).replace(/ \d{4}$/, '');
   return { jpeg, day, caption };
 }

@@ -5,7 +5,7 @@ const SIGNATURE_BYTES = 8192;
 // signpdf looks for exactly these stars and writes the byte range over them.
 const STARS = '*'.repeat(10);
 
-type Writer = Doc & {
+type Writer = Omit<Doc, 'page' | 'ref'> & {
   _root: { data: Record<string, unknown> };
   ref(data: object): { end(): void };
   page: { dictionary: unknown; annotations: unknown[] };
@@ -18,7 +18,7 @@ const text = (value: string) => new String(value);
  * signature. It certifies the file and permits no change to it (DocMDP, P 1): one revision, whole.
  */
 export function addSignatureField(doc: Doc, { name, now }: { name: string; now: Date }): void {
-  const writer = doc as Writer;
+  const writer = doc as unknown as Writer;
   const signature = writer.ref({
     Type: 'Sig',
     Filter: 'Adobe.PPKLite',
