@@ -24,6 +24,8 @@ async function start(supervisor: Supervisor): Promise<void> {
     port: ports.web,
     keysFolder: join(folder, 'keys'),
   });
+  // For commands beside the running demo, such as `npm run log:check`; it holds the demo's secrets.
+  writeFileSync(join(folder, 'environment.json'), JSON.stringify(settings), { mode: 0o600 });
   const env = { ...process.env, ...settings };
   const { migrate } = await import('#server/db/migrate.ts');
   await migrate(services.databaseUrl);
