@@ -75,7 +75,7 @@ const VIEWERS: Viewer[] = [
 ];
 
 const table = PAGE.split('\n')
-  .filter((line) => line.startsWith('| ') && !line.startsWith('| verb'))
+  .filter((line) => line.startsWith('| ') && !/^\| (?:verb |-)/.test(line))
   .map((line) =>
     line
       .slice(1, -1)
