@@ -43,7 +43,9 @@ export default tseslint.config(
     rules: { '@typescript-eslint/no-unsafe-assignment': 'off' },
   },
   {
+    // Tests' `useDatabase` and the like are no hooks of React.
     files: ['app/**/*.{ts,tsx}'],
+    ignores: ['**/*.test.{ts,tsx}'],
     extends: [reactHooks.configs.flat.recommended],
   },
   {
