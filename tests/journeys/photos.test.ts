@@ -90,7 +90,7 @@ describe('photos from the phone', () => {
     const cut = await aPhoto('cut.jpg');
     cut.buffer = cut.buffer.subarray(0, 500);
     await choose(page, [...good, words, cut]);
-    await page.getByText('5 of 7 up.').waitFor({ timeout: 60_000 });
+    await page.getByText('5 up, 2 did not go up.').waitFor({ timeout: 60_000 });
     expect(await row(page, 'words.jpg').innerText()).toContain(
       'This file is not a photo the shop can read. Send JPEG, PNG, WebP or HEIC.',
     );
@@ -99,7 +99,7 @@ describe('photos from the phone', () => {
 
     // The same file chosen again is the same photo.
     await choose(page, good.slice(0, 1));
-    await page.getByText('5 of 7 up.').waitFor();
+    await page.getByText('5 up, 2 did not go up.').waitFor();
     await expectSafe(good);
   });
 

@@ -46,4 +46,9 @@ it('counts what is up, and where the rest is safe', () => {
     '1 of 3 up. Keep this page open until then.',
   );
   expect(goingUpSentence([photo('up'), photo('up')])).toBe('All 2 are up.');
+  const refused = photo('failed', { final: true });
+  expect(goingUpSentence([photo('up'), photo('waiting'), refused])).toBe(
+    '1 of 2 up. Keep this page open until then.',
+  );
+  expect(goingUpSentence([photo('up'), refused])).toBe('1 up, 1 did not go up.');
 });

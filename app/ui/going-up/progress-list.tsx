@@ -8,11 +8,14 @@ interface Props {
   onRetry?: (id: string) => void;
 }
 
-/** "1 of 3 up. Keep this page open until then." */
+/** "1 of 3 up. Keep this page open until then."; what was refused is not waited for. */
 export function goingUpSentence(photos: GoingUpView[]): string {
   const up = photos.filter((photo) => photo.state === 'up').length;
-  if (up === photos.length) return up === 1 ? 'It is up.' : `All ${up} are up.`;
-  return `${up} of ${photos.length} up. Keep this page open until then.`;
+  const refused = photos.filter((photo) => photo.state === 'failed' && photo.final).length;
+  if (up + refused < photos.length)
+    return `${up} of ${photos.length - refused} up. Keep this page open until then.`;
+  if (refused > 0) return `${up} up, ${refused} did not go up.`;
+  return up === 1 ? 'It is up.' : `All ${up} are up.`;
 }
 
 function Words({ photo, onRetry }: { photo: GoingUpView; onRetry?: (id: string) => void }) {

@@ -12,6 +12,8 @@ import type { GoingUpView } from '../types.ts';
 // By ending too: some systems know no type for HEIC.
 const ACCEPT = 'image/jpeg,image/png,image/webp,image/heic,image/heif,.heic,.heif';
 
+const WHAT = 'JPEG, PNG, WebP or HEIC, up to 50 MB each.';
+
 const nothing = () => () => undefined;
 const useHydrated = () =>
   useSyncExternalStore(
@@ -73,47 +75,52 @@ export function PhotoDrop({ caseNumber, entryId, onPhotos }: Props) {
         encType="multipart/form-data"
         action={`/api/cases/${caseNumber}/photos/form?${query}`}
       >
-        <DropArea
-          icon="camera"
-          title="Photos"
-          sub="JPEG, PNG, WebP or HEIC, up to 50 MB each."
-          over={isDragActive}
-          className="flex-wrap py-3"
-        >
-          <input
-            {...getInputProps({
-              name: 'photos',
-              accept: ACCEPT,
-              multiple: true,
-              'aria-label': 'Choose photos',
-              className: hydrated ? 'sr-only' : '',
-              // The button beside it opens it then.
-              tabIndex: hydrated ? -1 : 0,
-              'aria-hidden': hydrated,
-              style: {},
-            })}
-          />
-          <span className="ml-auto flex flex-wrap gap-2">
-            {hydrated ? (
-              <>
-                <Button
-                  size="big"
-                  type="button"
-                  icon="camera"
-                  className="phone:hidden"
-                  onClick={() => camera.current?.click()}
-                >
-                  Take a photo
-                </Button>
-                <Button size="big" type="button" onClick={open}>
-                  Choose photos
-                </Button>
-              </>
-            ) : (
-              <Button size="big">Send the photos</Button>
-            )}
-          </span>
-        </DropArea>
+        <input
+          {...getInputProps({
+            name: 'photos',
+            accept: ACCEPT,
+            multiple: true,
+            'aria-label': 'Choose photos',
+            className: hydrated ? 'sr-only' : 'mb-3 block w-full',
+            // The buttons open it then.
+            tabIndex: hydrated ? -1 : 0,
+            'aria-hidden': hydrated,
+            style: {},
+          })}
+        />
+        {hydrated ? (
+          <>
+            <div className="grid grid-cols-2 gap-2 phone:hidden">
+              <Button
+                size="big"
+                type="button"
+                icon="camera"
+                onClick={() => camera.current?.click()}
+              >
+                Take a photo
+              </Button>
+              <Button size="big" type="button" onClick={open}>
+                Choose photos
+              </Button>
+            </div>
+            <DropArea
+              icon="camera"
+              title="Drop photos here"
+              sub={WHAT}
+              over={isDragActive}
+              className="py-3 max-phone:hidden"
+            >
+              <Button size="tall" type="button" className="ml-auto shrink-0" onClick={open}>
+                Choose photos
+              </Button>
+            </DropArea>
+          </>
+        ) : (
+          <div className="flex flex-wrap items-center justify-between gap-3">
+            <span className="text-label text-ink-2">{WHAT}</span>
+            <Button size="big">Send the photos</Button>
+          </div>
+        )}
       </form>
       <input
         ref={camera}
