@@ -3,12 +3,14 @@ import { beforeAll, describe, expect, it } from 'vitest';
 import { leafHash } from '#evidence/seal/leaf-hash.ts';
 import { rootOfLeaves } from '#evidence/merkle/root-of-leaves.ts';
 import { treeRoot } from '#evidence/merkle/tree-root.ts';
+import { readPart } from '#evidence/chain/read-part.ts';
 import { readHeader } from '#evidence/seal/read-header.ts';
 import { run, select, transaction } from '#server/db/sql.ts';
 import { useDatabase } from '#tests/setup/database.ts';
 import { appendEntry, type NewEntry } from './append-entry.ts';
 import { withNodes } from './log-nodes.ts';
 import { openLog } from './open-log.ts';
+import { recordClock } from './record-clock.ts';
 import { readLogEntries } from './read-log.ts';
 import { readLogState } from './log-state.ts';
 
@@ -86,9 +88,31 @@ describe('appending', () => {
     const repeated = await append(entry(randomBytes(16), at(5)));
     expect(repeated.recordedAt).toEqual(first.recordedAt);
     await expect(append(entry(randomBytes(16), new Date(at(5).getTime() - 1)))).rejects.toThrow(
-      'The server’s clock reads 2026-03-01T08:04:59.999Z, but the last entry was sealed at 2026-03-01T08:10:00.000Z. Set the clock right, then seal again.',
+      'The server’s clock reads 2026-03-01T08:04:59.999Z, but the last entry was sealed at 2026-03-01T08:10:00.000Z. Set the clock right, then seal again; if it was wrong before, run npm run log:clock.',
     );
     expect((await append(entry(randomBytes(16), at(11)))).recordedAt).toEqual(at(11));
+  });
+
+  it('goes back in time only after the log says that the clock was wrong', async () => {
+    await append(entry(randomBytes(16), at(1000)));
+    const right = at(12);
+    await expect(append(entry(randomBytes(16), right))).rejects.toThrow('npm run log:clock');
+    await expect(recordClock({ reason: ' ' }, { now: right })).rejects.toThrow(
+      'Why was the clock wrong? Say it in a few words.',
+    );
+    await recordClock({ reason: 'The battery of the server’s clock was flat.' }, { now: right });
+    expect((await append(entry(randomBytes(16), right))).recordedAt).toEqual(right);
+    const [row] = await select<{ bytes: Buffer }>(
+      `SELECT p.bytes FROM sealed_entries s JOIN sealed_parts p ON p.leaf_index = s.leaf_index
+       WHERE s.kind = 'clock'`,
+    );
+    expect(readPart('clock', 'shown', row!.bytes)).toMatchObject({
+      old: at(1000).toISOString(),
+      new: right.toISOString(),
+    });
+    await expect(recordClock({ reason: 'Again' }, { now: at(13) })).rejects.toThrow(
+      'The clock is not behind the last sealed entry.',
+    );
   });
 
   it('keeps an occurredAt far before the time it was recorded, both as they are', async () => {

@@ -116,7 +116,8 @@ function seal(entry: NewEntry, at: Date, seq: number, prev: Buffer | null) {
  */
 export async function appendEntry(tx: Transaction, entry: NewEntry): Promise<Appended> {
   const head = await lockHead(tx);
-  const at = recordedAt(entry.now, head.lastRecordedAt);
+  // An entry that says the clock was wrong is the one that may go back.
+  const at = entry.kind === 'clock' ? entry.now : recordedAt(entry.now, head.lastRecordedAt);
   const { seq, prev } = await endOfChain(entry.chain, tx);
   refuseTooMany(entry, seq);
   const { sealed, salt, photos } = seal(entry, at, seq, prev);

@@ -14,8 +14,8 @@ export function noteDemoKeys(): void {
  * Keys made for a demonstration lie about on disks; nobody else may be asked to trust them.
  * @throws Error with a sentence when PUBLIC_URL can be reached by others and the keys are demo keys
  */
-export function refuseDemoKeysInPublic(): void {
-  if (isLoopback(env().PUBLIC_URL) || !existsSync(note())) return;
+export function refuseDemoKeysInPublic(publicUrl = env().PUBLIC_URL): void {
+  if (isLoopback(publicUrl) || !existsSync(note())) return;
   throw new Error(
     `The keys in ${env().KEYS_DIR} were made for a demonstration and PUBLIC_URL can be reached by others. ` +
       'Set KEYS_DIR to an empty folder and DATABASE_URL to a new database.',

@@ -12,6 +12,6 @@ export function recordedAt(now: Date, last: Date | null): Date {
   if (last.getTime() - now.getTime() <= GRACE_MS) return last;
   throw new Conflict(
     `The server’s clock reads ${now.toISOString()}, but the last entry was sealed at ` +
-      `${last.toISOString()}. Set the clock right, then seal again.`,
+      `${last.toISOString()}. Set the clock right, then seal again; if it was wrong before, run npm run log:clock.`,
   );
 }
