@@ -64,7 +64,8 @@ describe('an estimate', () => {
     expect(await state()).toBe('bench');
     const [event] = await listTimeline(shop.desk, { caseNumber: repair.number });
     expect(event).toMatchObject({ kind: 'authorisation', seal: { by: 'Sunniva Reed' } });
-    expect(JSON.stringify(event)).not.toContain('616');
+    // Its words, not its ids and digests: those may hold any digits.
+    expect(`${event?.title} ${event?.text}`).not.toMatch(/616|61680/);
     await expect(answer('declined', 2)).rejects.toMatchObject({ code: 'conflict' });
   });
 
