@@ -52,11 +52,11 @@ async function photograph(page: Page, number: string, onPhone: boolean): Promise
 async function sealAll(page: Page, number: string): Promise<void> {
   const here = new RegExp(`/bench/cases/${number}(?:[?#].*)?$`);
   for (;;) {
-    // An open case scrolls to its latest entry once its script runs: a click before that would miss.
-    await page.goto(`${app.url}/bench/cases/${number}`, { waitUntil: 'networkidle' });
+    await page.goto(`${app.url}/bench/cases/${number}`);
     const open = page.locator('main').getByRole('link', { name: 'Seal it' });
     if ((await open.count()) === 0) return;
-    await open.first().click();
+    // Followed by its address: an open case scrolls to its latest entry while it comes to life.
+    await page.goto(new URL((await open.first().getAttribute('href')) ?? '', app.url).href);
     await page.getByRole('button', { name: 'Seal it' }).click();
     await Promise.race([page.waitForURL(here), page.getByRole('alert').waitFor()]);
   }
