@@ -4,7 +4,7 @@ import { drawRule } from './purfling.ts';
 import { heightOf, putRuns, putText } from './put-text.ts';
 import { COLOUR, INNER, PAGE, px } from './sheet.ts';
 import { group, tag, type Doc, type Element } from './tagging.ts';
-import { termsInFull } from './terms.ts';
+import { termsInFull, type Section } from './terms.ts';
 import { TYPE } from './type.ts';
 
 const TEXT_X = INNER.left + px(186);
@@ -38,6 +38,36 @@ function drawFoot(doc: Doc, section: Element, facts: PaperFacts, page: number): 
   );
 }
 
+const CONTINUED = (heading: string) => `${heading.replace(/, continued$/, '')}, continued`;
+
+/** What of a text fits into a height, whole words, and what is left; a short text is not split. */
+function splitAt(doc: Doc, text: string, height: number): [now: string, rest: string] {
+  const fits = (words: string[]) =>
+    heightOf(doc, TYPE.termsInFull, words.join(' '), TEXT_WIDTH) <= height;
+  const words = text.split(' ');
+  if (fits(words)) return [text, ''];
+  if (words.length < 120) return ['', text];
+  let [least, most] = [0, words.length];
+  while (most - least > 1) {
+    const middle = (least + most) >> 1;
+    if (fits(words.slice(0, middle))) least = middle;
+    else most = middle;
+  }
+  return [words.slice(0, least).join(' '), words.slice(least).join(' ')];
+}
+
+function drawPiece(doc: Doc, section: Element, { heading, text }: Section, y: number): number {
+  const at = y + PAD;
+  tag(doc, section, 'H2', () =>
+    putText(doc, TYPE.heading, heading, { x: INNER.left, y: at, width: px(170) }),
+  );
+  const below = tag(doc, section, 'P', () =>
+    putText(doc, TYPE.termsInFull, text, { x: TEXT_X, y: at, width: TEXT_WIDTH }),
+  );
+  drawRule(doc, INNER.left, below + PAD, INNER.width, COLOUR.line);
+  return below + PAD;
+}
+
 /** Draws the terms in full, on as many pages as they take: two by the shipped wording. */
 export function drawTerms(doc: Doc, root: Element, facts: PaperFacts): void {
   let page = 1;
@@ -65,21 +95,17 @@ export function drawTerms(doc: Doc, root: Element, facts: PaperFacts): void {
   );
   y += px(18);
   drawRule(doc, INNER.left, y, INNER.width, COLOUR.ink);
-  for (const { heading, text } of termsInFull(facts)) {
-    const height = heightOf(doc, TYPE.termsInFull, text, TEXT_WIDTH);
-    if (y + 2 * PAD + height > FOOT) {
+  const pieces = termsInFull(facts);
+  for (let piece = pieces.shift(); piece; piece = pieces.shift()) {
+    const { heading, text } = piece;
+    const [now, rest] = splitAt(doc, text, FOOT - y - 2 * PAD);
+    if (rest !== '')
+      pieces.unshift({ heading: now === '' ? heading : CONTINUED(heading), text: rest });
+    if (now !== '') y = drawPiece(doc, section, { heading, text: now }, y);
+    if (rest !== '') {
       drawFoot(doc, section, facts, page);
       y = begin('Terms in full, continued') + px(18);
     }
-    const at = y + PAD;
-    tag(doc, section, 'H2', () =>
-      putText(doc, TYPE.heading, heading, { x: INNER.left, y: at, width: px(170) }),
-    );
-    const below = tag(doc, section, 'P', () =>
-      putText(doc, TYPE.termsInFull, text, { x: TEXT_X, y: at, width: TEXT_WIDTH }),
-    );
-    y = below + PAD;
-    drawRule(doc, INNER.left, y, INNER.width, COLOUR.line);
   }
   drawFoot(doc, section, facts, page);
 }
