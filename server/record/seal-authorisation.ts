@@ -27,7 +27,7 @@ export async function sealAuthorisation(
     caseId,
     record,
     kind: 'authorisation',
-    phase: 'during',
+    phase: 'before',
     shown: { v: 1, text },
     parts: { ...staffPart(by), ...(money ? { money: { v: 1, ...money } } : {}) },
     names: [],
