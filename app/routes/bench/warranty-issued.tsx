@@ -62,7 +62,7 @@ export function IssuedWarranty({ issued }: { issued: IssuedView }) {
             ))}
           </tbody>
         </table>
-        <p className="mt-3 text-ink-2">Issued by {by}.</p>
+        <p className="mt-3 text-ink-2">{by}.</p>
         {seal && sealValue && (
           <div className="mt-5 flex flex-wrap items-center gap-5 text-verdigris">
             <Rosette sealValue={sealValue} />

@@ -22,7 +22,7 @@ export function issuedView(warranty: WarrantyFile, zone: string) {
     standing,
     term: `${term}, to ${dateYear(warranty.validUntil, zone)}`,
     work: work.map(({ text, name }) => ({ text, name })),
-    by: `${warranty.issuedBy}, ${dateYearTime(warranty.issuedAt ?? warranty.drawnAt, zone)}`,
+    by: `${step === 'issued' ? 'Issued' : 'Drawn up'} by ${warranty.issuedBy}, ${dateYearTime(warranty.issuedAt ?? warranty.drawnAt, zone)}`,
     seal: sealValue && groupedDigest(sealValue),
     sealValue,
     paper: paperId && `/api/papers/${paperId}`,
