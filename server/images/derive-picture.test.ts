@@ -1,5 +1,6 @@
 import { Jimp } from 'jimp';
 import { describe, expect, it } from 'vitest';
+import { cmykJpeg } from '#tests/photos/cmyk.ts';
 import { exifTiff, withExif, withJpegProfile } from '#tests/photos/exif.ts';
 import {
   aJpeg,
@@ -12,8 +13,10 @@ import {
   withPngExif,
   withPngProfile,
 } from '#tests/photos/pictures.ts';
+import { heicShell } from '#tests/photos/heic.ts';
 import { aProfile } from '#tests/photos/profile.ts';
 import { derivePicture } from './derive-picture.ts';
+import { readProfile } from './read-profile.ts';
 import { decodeWebp } from './webp-codec.ts';
 import { chunksIn, webpOf } from './webp-chunks.ts';
 
@@ -126,6 +129,13 @@ describe('the colour profile', () => {
     expect(Buffer.from(iccp?.body ?? []).equals(profile)).toBe(true);
   });
 
+  it('is found in HEIC', () => {
+    const profile = aProfile(600);
+    const found = readProfile(heicShell({ profile }), 'image/heic');
+    expect(found && profile.equals(found)).toBe(true);
+    expect(readProfile(heicShell(), 'image/heic')).toBeNull();
+  });
+
   it('is left out when it is none, is for other colours, or hides something behind itself', async () => {
     const types = async (jpeg: Buffer) => {
       const { copies } = await derivePicture(jpeg, 'image/jpeg');
@@ -140,6 +150,17 @@ describe('the colour profile', () => {
     const hidden = Buffer.concat([aProfile(400), Buffer.from('40.446 N')]);
     const [, iccp] = await types(withJpegProfile(plain, hidden));
     expect(iccp?.body).toHaveLength(400);
+  });
+});
+
+describe('a JPEG the fast decoder gives up on', () => {
+  it('is read by the slower one: CMYK', async () => {
+    const { copies, width, height } = await derivePicture(cmykJpeg(), 'image/jpeg');
+    expect([width, height]).toEqual([8, 8]);
+    const { data } = await decodeWebp(copies[0]?.bytes ?? Buffer.alloc(0));
+    const [red = 0, green = 0, blue = 0] = data;
+    // Half of each ink over half of black.
+    for (const value of [red, green, blue]) expect(Math.abs(value - 64)).toBeLessThan(6);
   });
 });
 

@@ -14,7 +14,7 @@ const SHELVES = [
 ] as const;
 
 /**
- * Removes originals and copies that no row knows and that are older than an hour: what a crash left
+ * Removes originals, copies and papers that no row knows and that are older than an hour: what a crash left
  * between storing and writing down. Returns how many. Throws Unavailable.
  */
 export async function sweepObjects({ now = new Date() } = {}): Promise<number> {

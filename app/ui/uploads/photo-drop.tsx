@@ -47,7 +47,10 @@ export function PhotoDrop({ caseNumber, entryId, onPhotos }: Props) {
     onDrop: add,
   });
 
+  const lookedForEarly = useRef(false);
   useEffect(() => {
+    if (lookedForEarly.current) return;
+    lookedForEarly.current = true;
     // Chosen before the program had come.
     const early = [...(inputRef.current?.files ?? [])];
     if (early.length > 0) void pageQueue().add(early, { caseNumber, entryId });
