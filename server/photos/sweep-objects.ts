@@ -11,11 +11,12 @@ const SHELVES = [
     shelf: 'copies',
     known: 'SELECT object_key AS `key` FROM photo_copies WHERE object_key IN (?)',
   },
+  { shelf: 'papers', known: 'SELECT object_key AS `key` FROM papers WHERE object_key IN (?)' },
 ] as const;
 
 /**
- * Removes originals, copies and papers that no row knows and that are older than an hour: what a crash left
- * between storing and writing down. Returns how many. Throws Unavailable.
+ * Removes originals, copies and papers that no row knows and that are older than an hour: what a
+ * crash left between storing and writing down. Returns how many. Throws Unavailable.
  */
 export async function sweepObjects({ now = new Date() } = {}): Promise<number> {
   let swept = 0;
