@@ -102,6 +102,7 @@ test.for([
   { screen: 'desktop', options: desktop, email: 'edda.desk@vance.example' },
 ])(
   'take in, photograph, seal, follow, close, issue, verify: $screen',
+  { timeout: 300_000 },
   async (on) => {
     // A photo that is still being prepared is answered with 409, and asked again.
     const bench = await browser.page({ ...on.options, expected: [/status of 409/] });
@@ -120,5 +121,4 @@ test.for([
     const check = await closeAndIssue(bench, number);
     await verifyAsStranger(await browser.page(on.options), check);
   },
-  300_000,
 );
